@@ -1,0 +1,29 @@
+import type { Knex } from 'knex';
+import { pino, type Logger } from 'pino';
+import { openDatabase } from './db/connection.ts';
+import { openFileStore, type FileStore } from './files/file-store.ts';
+import { openStripe, type StripeClient } from './payments/stripe-client.ts';
+import type { Settings } from './settings.ts';
+
+/** What every feature is handed: the only place where things that live as long as the process are made. */
+export interface AppContext {
+  settings: Settings;
+  db: Knex;
+  log: Logger;
+  files: FileStore;
+  stripe: StripeClient;
+  /** The one clock. */
+  now: () => Date;
+}
+
+/** Makes the context; `close` gives everything back. */
+export function makeContext(settings: Settings, overrides: Partial<AppContext> = {}): AppContext {
+  return {
+    settings,
+    db: overrides.db ?? openDatabase(settings.database.url),
+    log: overrides.log ?? pino({ level: settings.mode === 'test' ? 'silent' : 'info' }, pino.destination(2)),
+    files: overrides.files ?? openFileStore(settings.dataDir),
+    stripe: overrides.stripe ?? openStripe(settings.stripe),
+    now: overrides.now ?? (() => new Date()),
+  };
+}
