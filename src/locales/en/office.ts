@@ -1,0 +1,7 @@
+export const office = {
+  title: {
+    people: 'People',
+    tiers: 'Tiers and prices',
+    imprint: 'Imprint',
+  },
+};

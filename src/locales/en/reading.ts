@@ -1,0 +1,7 @@
+export const reading = {
+  title: {
+    book: 'Contents',
+    recipe: 'Recipe',
+    account: 'Account',
+  },
+};

@@ -1,0 +1,252 @@
+import type { Lack, Provenance, StrengthBand } from '@shared/contracts/figures.ts';
+import type { SubscriptionState } from '@shared/contracts/membership.ts';
+import type { Keeping, OperationKind } from '@shared/contracts/recipe-document.ts';
+import type { Allergen, Caution, RecipeKind, RecipeState, Role, Unit } from '@shared/contracts/words.ts';
+
+/** The names of the trade's words. A pair divided by a bar is singular and plural. */
+export const words = {
+  kind: {
+    drink: 'Drink',
+    syrup: 'Syrup',
+    cordial: 'Cordial',
+    shrub: 'Shrub',
+    infusion: 'Infusion',
+    liqueur: 'Liqueur',
+    bitters: 'Bitters',
+    garnish: 'Garnish',
+    ice: 'Ice',
+    technique: 'Technique',
+  } satisfies Record<RecipeKind, string>,
+
+  state: {
+    draft: 'Draft',
+    'on-trial': 'On trial',
+    'with-editor': 'With editor',
+    cleared: 'Cleared',
+    out: 'Out',
+    withdrawn: 'Withdrawn',
+  } satisfies Record<RecipeState, string>,
+
+  role: {
+    creator: 'Creator',
+    editor: 'Editor',
+    admin: 'Admin',
+  } satisfies Record<Role, string>,
+
+  unit: {
+    ml: 'ml',
+    cl: 'cl',
+    l: 'l',
+    g: 'g',
+    kg: 'kg',
+    oz: 'oz',
+    lb: 'lb',
+    floz: 'fl oz',
+    tsp: 'tsp',
+    tbsp: 'tbsp',
+    cup: 'cup | cups',
+    pint: 'pint | pints',
+    quart: 'quart | quarts',
+    gill: 'gill | gills',
+    'imp-floz': 'imp fl oz',
+    'imp-pint': 'imp pint | imp pints',
+    'imp-quart': 'imp quart | imp quarts',
+    'imp-gill': 'imp gill | imp gills',
+    dash: 'dash | dashes',
+    drop: 'drop | drops',
+    barspoon: 'barspoon | barspoons',
+    pinch: 'pinch | pinches',
+    splash: 'splash | splashes',
+    piece: 'piece | pieces',
+    part: 'part | parts',
+    leaf: 'leaf | leaves',
+    sprig: 'sprig | sprigs',
+    handful: 'handful | handfuls',
+    slice: 'slice | slices',
+    twist: 'twist | twists',
+    strip: 'strip | strips',
+    stick: 'stick | sticks',
+    pod: 'pod | pods',
+    drink: 'drink | drinks',
+    bottle: 'bottle | bottles',
+  } satisfies Record<Unit, string>,
+
+  /** The same units in full, for choosing one. */
+  unitInFull: {
+    ml: 'millilitres (ml)',
+    cl: 'centilitres (cl)',
+    l: 'litres (l)',
+    g: 'grams (g)',
+    kg: 'kilograms (kg)',
+    oz: 'ounces (oz)',
+    lb: 'pounds (lb)',
+    floz: 'US fluid ounces',
+    tsp: 'US teaspoons',
+    tbsp: 'US tablespoons',
+    cup: 'US cups',
+    pint: 'US pints',
+    quart: 'US quarts',
+    gill: 'US gills',
+    'imp-floz': 'imperial fluid ounces',
+    'imp-pint': 'imperial pints',
+    'imp-quart': 'imperial quarts',
+    'imp-gill': 'imperial gills',
+    dash: 'dashes',
+    drop: 'drops',
+    barspoon: 'barspoons',
+    pinch: 'pinches',
+    splash: 'splashes',
+    piece: 'pieces',
+    part: 'parts',
+    leaf: 'leaves',
+    sprig: 'sprigs',
+    handful: 'handfuls',
+    slice: 'slices',
+    twist: 'twists',
+    strip: 'strips',
+    stick: 'sticks',
+    pod: 'pods',
+    drink: 'drinks',
+    bottle: 'bottles',
+  } satisfies Record<Unit, string>,
+
+  allergen: {
+    gluten: 'Cereals with gluten',
+    crustaceans: 'Crustaceans',
+    egg: 'Egg',
+    fish: 'Fish',
+    peanuts: 'Peanuts',
+    soya: 'Soya',
+    milk: 'Milk',
+    nuts: 'Nuts',
+    celery: 'Celery',
+    mustard: 'Mustard',
+    sesame: 'Sesame',
+    sulphites: 'Sulphites',
+    lupin: 'Lupin',
+    molluscs: 'Molluscs',
+  } satisfies Record<Allergen, string>,
+
+  caution: {
+    'spirit-near-heat': {
+      title: 'Strong spirit near heat',
+      text: 'The vapour of strong spirit catches fire. No flame and no spark nearby, the hob off unless a step says otherwise, windows open. Follow your local fire code.',
+    },
+    'hot-sugar': {
+      title: 'Hot sugar',
+      text: 'Hot syrup sticks and burns. Keep cold water within reach and children out of it, and follow the maker’s instructions for the pan.',
+    },
+    'raw-egg': {
+      title: 'Raw egg',
+      text: 'Not for anyone who is pregnant, very young, old or unwell. A pasteurised egg makes the same foam. Follow local food safety codes where you serve it to others.',
+    },
+    'fresh-keeping': {
+      title: 'Keeping',
+      text: 'Low in acid or freshly infused: keep it cold and use it soon. Keeping times are guidance, not a laboratory result. If it fizzes, clouds or smells of yeast, throw it away. Local food safety codes come first.',
+    },
+    'sealed-gas-pressure': {
+      title: 'Sealed and under pressure',
+      text: 'A sealed vessel can burst when gas builds up. Use one that is made for the pressure, follow its maker’s instructions, leave headspace, and open it cold and away from your face.',
+    },
+    'vacuum-bag': {
+      title: 'Vacuum bag at low heat',
+      text: 'Without air and at low temperatures the wrong bacteria thrive. Hold the stated temperature for the whole time, chill fast, and follow the maker’s instructions and the local code for this way of working.',
+    },
+    'dry-ice': {
+      title: 'Dry ice',
+      text: 'It burns skin and displaces air. Gloves, an open window, never in a closed vessel, never in a glass that is served. Follow the supplier’s instructions and your local code.',
+    },
+    'liquid-nitrogen': {
+      title: 'Liquid nitrogen',
+      text: 'It burns at once and displaces air. Trained people only, with the equipment made for it; nothing is served until all of it is gone. Follow the supplier’s instructions and licensed practice.',
+    },
+    'harmful-botanical': {
+      title: 'A plant that can harm',
+      text: 'One of the plants here harms in the wrong kind, part or amount. Buy it as food from a supplier who names it, keep to the amount, ask a doctor if you are pregnant or take medicines, and follow what your local code allows.',
+    },
+    'home-distilling': {
+      title: 'Distilling is licensed work',
+      text: 'Distilling alcohol without a licence is against the law in most places and dangerous everywhere. Leave it to licensed practice; buy the distillate.',
+    },
+    'grapefruit-medicines': {
+      title: 'Grapefruit and medicines',
+      text: 'Grapefruit changes how strongly some medicines act. Read the leaflet of yours, or ask a pharmacist.',
+    },
+  } satisfies Record<Caution, { title: string; text: string }>,
+
+  operation: {
+    add: 'Add',
+    heat: 'Heat',
+    reduce: 'Reduce',
+    infuse: 'Infuse',
+    strain: 'Strain',
+    cool: 'Cool',
+    shake: 'Shake',
+    stir: 'Stir',
+    blend: 'Blend',
+    throw: 'Throw',
+    carbonate: 'Carbonate',
+    clarify: 'Clarify',
+    'fat-wash': 'Fat-wash',
+    bottle: 'Bottle',
+  } satisfies Record<OperationKind, string>,
+
+  liveliness: { warm: 'Warm', simmer: 'Simmer', boil: 'Boil' },
+
+  attention: { 'hands-on': 'Hands-on', waiting: 'Waiting' },
+
+  keeping: {
+    refrigerator: 'in the refrigerator',
+    freezer: 'in the freezer',
+    'cool-dark': 'cool and dark',
+    room: 'at room temperature',
+    'serve-at-once': 'serve at once',
+  } satisfies Record<Keeping['place'], string>,
+
+  keepingBasis: { stated: 'stated', guidance: 'guidance' } satisfies Record<Keeping['basis'], string>,
+
+  provenance: {
+    measured: 'measured',
+    stated: 'stated',
+    computed: 'computed',
+    estimated: 'estimated',
+  } satisfies Record<Provenance, string>,
+
+  band: {
+    none: 'No alcohol',
+    light: 'Light',
+    medium: 'Medium',
+    strong: 'Strong',
+    'very-strong': 'Very strong',
+  } satisfies Record<StrengthBand, string>,
+
+  lack: {
+    'amount-missing': 'no amount for {subject}',
+    'unit-missing': 'no unit for {subject}',
+    'density-missing': 'the density of {subject} is not known',
+    'piece-weight-missing': 'the weight of one {subject} is not known',
+    'not-in-larder': '{subject} is not in the larder',
+    'strength-missing': 'the strength of {subject} is not known',
+    'sugar-missing': 'the sugar in {subject} is not known',
+    'yield-missing': 'no yield is stated for {subject}',
+    'duration-missing': 'no time for {subject}',
+    'component-missing': 'the recipe of {subject} is missing',
+    'loss-unknown': 'what {subject} loses is not known',
+    'keeping-missing': 'no keeping is stated for {subject}',
+    'step-cycle': 'the steps wait for each other at {subject}',
+    'component-cycle': '{subject} goes into itself',
+  } satisfies Record<Lack['code'], string>,
+
+  membership: {
+    incomplete: 'Payment not finished',
+    incomplete_expired: 'Never begun',
+    trialing: 'On trial',
+    active: 'Active',
+    past_due: 'Payment overdue',
+    canceled: 'Ended',
+    unpaid: 'Not paid',
+    paused: 'Paused',
+  } satisfies Record<SubscriptionState, string>,
+
+  interval: { month: 'by the month', year: 'by the year' },
+};
