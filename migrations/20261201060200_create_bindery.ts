@@ -96,19 +96,32 @@ export async function up(db: Knex): Promise<void> {
     end $$;
     create trigger editions_never_change before update on editions for each row execute function refuse_rebinding();
 
+    create table bound_chapters (
+      edition_id uuid not null,
+      chapter_id uuid not null,
+      position integer not null,
+      title text not null,
+      introduction_html text not null,
+      access jsonb not null,
+
+      constraint bound_chapters_pkey primary key (edition_id, chapter_id),
+      constraint bound_chapters_edition_fkey foreign key (edition_id) references editions (id) on delete cascade
+    );
+
     -- One row a bound recipe, so that reading loads one recipe and not a whole book.
     create table bound_recipes (
       edition_id uuid not null,
       recipe_id uuid not null,
       slug text not null,
       position integer not null,
+      chapter_id uuid not null,
       chapter_title text not null,
       access jsonb not null,
+      -- What everyone past the age check may know; lists read nothing else.
+      teaser jsonb not null,
       recipe jsonb not null,
       plates jsonb not null,
-      -- Small copies of what lists and neighbours need.
       title text not null,
-      kind text not null,
 
       constraint bound_recipes_pkey primary key (edition_id, recipe_id),
       constraint bound_recipes_edition_fkey foreign key (edition_id) references editions (id) on delete cascade,
@@ -119,7 +132,7 @@ export async function up(db: Knex): Promise<void> {
 
 export async function down(db: Knex): Promise<void> {
   await db.raw(`
-    drop table bound_recipes, editions, placements, chapters, books;
+    drop table bound_recipes, bound_chapters, editions, placements, chapters, books;
     drop function refuse_rebinding();
   `);
 }

@@ -1,5 +1,6 @@
 import { run } from 'graphile-worker';
 import { makeContext } from './context.ts';
+import { watchWorkers } from './jobs/dead-workers.ts';
 import { makeTasks, SCHEDULE } from './jobs/tasks.ts';
 import { readSettings } from './settings.ts';
 
@@ -7,6 +8,7 @@ import { readSettings } from './settings.ts';
 async function main(): Promise<void> {
   const settings = readSettings();
   const ctx = makeContext(settings);
+  const watch = await watchWorkers(settings.database.url, ctx.log);
   const runner = await run({
     connectionString: settings.database.url,
     taskList: makeTasks(ctx),
@@ -14,6 +16,7 @@ async function main(): Promise<void> {
     pollInterval: 1000,
     noHandleSignals: true,
     crontab: SCHEDULE,
+    events: watch.events,
   });
   process.send?.('ready');
 
@@ -23,7 +26,7 @@ async function main(): Promise<void> {
     ending = true;
     void runner
       .stop()
-      .then(() => ctx.db.destroy())
+      .then(() => Promise.all([watch.stop(), ctx.db.destroy()]))
       .finally(() => process.exit(0));
   };
   process.once('SIGTERM', end);

@@ -6,6 +6,5 @@ export interface JobPayloads {
   'sync-tier': { tierId: string };
   'converge-customer': { stripeCustomer: string };
   'reconcile-payments': Record<string, never>;
-  'sweep-stale': Record<string, never>;
 }
 export type JobName = keyof JobPayloads;

@@ -1,21 +1,30 @@
 import type { Task, TaskList } from 'graphile-worker';
 import type { AppContext } from '../context.ts';
+import { pressEdition } from '../editions/press.job.ts';
 import type { JobName, JobPayloads } from './jobs.ts';
 
-type Job<N extends JobName> = (ctx: AppContext, payload: JobPayloads[N]) => Promise<void>;
+/** Which try this is, for jobs that tell somebody when the last one has failed. */
+export interface JobAttempt {
+  last: boolean;
+}
+
+type Job<N extends JobName> = (ctx: AppContext, payload: JobPayloads[N], attempt: JobAttempt) => Promise<void>;
 type Jobs = { [N in JobName]: Job<N> };
 
 /** Which function does which job. */
-const jobs: Partial<Jobs> = {};
+const jobs: Partial<Jobs> = {
+  'press-edition': pressEdition,
+};
 
-/** Nightly reconciliation, and a sweep for work that a killed process left behind. */
-export const SCHEDULE = ['15 3 * * * reconcile-payments', '*/10 * * * * sweep-stale'].join('\n');
+/** The nightly reconciliation with the payment service. */
+export const SCHEDULE = '15 3 * * * reconcile-payments';
 
 export function makeTasks(ctx: AppContext): TaskList {
   return Object.fromEntries(
     Object.entries(jobs).map(([name, job]) => [
       name,
-      ((payload) => (job as Job<JobName>)(ctx, payload as never)) as Task,
+      ((payload, { job: { attempts, max_attempts: most } }) =>
+        (job as Job<JobName>)(ctx, payload as never, { last: attempts >= most })) as Task,
     ]),
   );
 }

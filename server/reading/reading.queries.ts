@@ -1,0 +1,124 @@
+import type { Knex } from 'knex';
+import type { BoundPlate } from '../../shared/contracts/editions.ts';
+import type { BoundChapterRow, BoundRecipeRow, BoundTeaser } from '../editions/editions.rows.ts';
+
+/** What of an entry the gate asks for. */
+export interface GatedRow {
+  access: BoundRecipeRow['access'];
+  opens: { rank: number; at: string }[];
+  withdrawn: boolean;
+}
+
+export interface TeaserRow extends GatedRow {
+  slug: string;
+  chapter_id: string;
+  teaser: BoundTeaser;
+}
+
+export interface RecipeRow extends TeaserRow {
+  recipe: BoundRecipeRow['recipe'];
+  plates: BoundPlate[];
+  edition_kind: 'edition' | 'leaf';
+  edition_number: number;
+  book_title: string;
+  previous: { slug: string; title: string } | null;
+  next: { slug: string; title: string } | null;
+}
+
+/**
+ * What readers of a book have before them: the recipes of its last issued edition, and leaves released since; where
+ * both hold a recipe, the leaf.
+ */
+const READABLE = `
+  select distinct on (bound_recipes.recipe_id)
+    bound_recipes.recipe_id, bound_recipes.edition_id, bound_recipes.slug, bound_recipes.title,
+    bound_recipes.chapter_id, bound_recipes.position, bound_recipes.access,
+    editions.kind as edition_kind, editions.number as edition_number, editions.opens,
+    books.title as book_title, recipes.state = 'withdrawn' as withdrawn
+  from books
+  join editions on editions.book_id = books.id and editions.state = 'issued'
+  join bound_recipes on bound_recipes.edition_id = editions.id
+  join recipes on recipes.id = bound_recipes.recipe_id
+  where books.slug = :book
+    and editions.issued_at >= coalesce(
+      (select max(latest.issued_at) from editions latest
+        where latest.book_id = books.id and latest.kind = 'edition' and latest.state = 'issued'),
+      '-infinity')
+  order by bound_recipes.recipe_id, editions.issued_at desc, editions.kind desc`;
+
+/** One recipe, with its neighbours among those that are not withdrawn. */
+export async function findReadable(db: Knex, book: string, slug: string): Promise<RecipeRow | undefined> {
+  const { rows } = await db.raw<{ rows: RecipeRow[] }>(
+    `with in_order as (
+      select readable.*,
+        lag(json_build_object('slug', slug, 'title', title)) over running as previous,
+        lead(json_build_object('slug', slug, 'title', title)) over running as next
+      from (${READABLE}) readable
+      window running as (partition by withdrawn order by position, edition_kind)
+    )
+    select in_order.*, bound_recipes.teaser, bound_recipes.recipe, bound_recipes.plates
+    from in_order
+    join bound_recipes
+      on bound_recipes.edition_id = in_order.edition_id and bound_recipes.recipe_id = in_order.recipe_id
+    where in_order.slug = :slug`,
+    { book, slug },
+  );
+  return rows[0];
+}
+
+/** The teasers of a book in running order; nothing that is kept back is loaded. */
+export async function findTeasers(db: Knex, book: string): Promise<TeaserRow[]> {
+  const { rows } = await db.raw<{ rows: TeaserRow[] }>(
+    `select readable.slug, readable.chapter_id, readable.access, readable.opens, readable.withdrawn, bound_recipes.teaser
+    from (${READABLE}) readable
+    join bound_recipes
+      on bound_recipes.edition_id = readable.edition_id and bound_recipes.recipe_id = readable.recipe_id
+    order by readable.position, readable.edition_kind`,
+    { book },
+  );
+  return rows;
+}
+
+export interface IssuedBook {
+  id: string;
+  slug: string;
+  title: string;
+  subtitle: string;
+  edition_id: string;
+  number: number;
+  issued_at: Date;
+  opens: GatedRow['opens'];
+  epub_hash: string;
+  epub_bytes: number;
+  recipe_count: number;
+  cover: BoundPlate | null;
+}
+
+/** The last issued edition of each book, or of the one with this address. */
+export async function findIssuedBooks(db: Knex, slug?: string): Promise<IssuedBook[]> {
+  const { rows } = await db.raw<{ rows: IssuedBook[] }>(
+    `select distinct on (books.id)
+      books.id, books.slug, editions.snapshot -> 'book' ->> 'title' as title,
+      editions.snapshot -> 'book' ->> 'subtitle' as subtitle,
+      editions.id as edition_id, editions.number, editions.issued_at, editions.opens, editions.epub_hash,
+      editions.epub_bytes, editions.recipe_count,
+      (select plate from jsonb_array_elements(editions.snapshot -> 'plates') plate
+        where plate ->> 'id' = editions.snapshot -> 'book' ->> 'coverPlateId') as cover
+    from books
+    join editions on editions.book_id = books.id and editions.kind = 'edition' and editions.state = 'issued'
+    where (:slug::text is null or books.slug = :slug)
+    order by books.id, editions.issued_at desc`,
+    { slug: slug ?? null },
+  );
+  return rows;
+}
+
+/** Chapters of the last edition and of leaves since, in order. */
+export async function findBoundChapters(db: Knex, editionId: string): Promise<BoundChapterRow[]> {
+  return db('bound_chapters').where({ edition_id: editionId }).orderBy('position');
+}
+
+/** The lowest tier whose rank is at least this one; what a teaser may name as its key. */
+export async function findTierFrom(db: Knex, rank: number): Promise<{ rank: number; name: string } | undefined> {
+  return db('tiers').whereNull('closed_at').andWhere('rank', '>=', rank).orderBy('rank').first('rank', 'name');
+}
