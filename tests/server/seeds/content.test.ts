@@ -5,6 +5,8 @@ import { afterEach, beforeAll, describe, expect, it } from 'vitest';
 import type { DemoContent, DemoRecipe } from '../../../seeds/content/content.ts';
 import { readContent } from '../../../seeds/content/read-content.ts';
 import { stableId } from '../../../seeds/content/stable-id.ts';
+import { computeFigures } from '../../../shared/engine/figures.ts';
+import { LARDER_BY_ID } from '../../../shared/larder/index.ts';
 
 const CONTENT = join(import.meta.dirname, '../../../content');
 
@@ -135,17 +137,36 @@ describe('the demo content', () => {
     expect(measured?.amount).toBeGreaterThanOrEqual((grams / density) * 0.93);
   });
 
-  it('warns of egg, nuts, milk, hot spirit and what harms by the handful', () => {
-    const warned = (slug: string) => byId.get(content.recipes.find((recipe) => recipe.slug === slug)?.id ?? '');
-    const larderIds = (slug: string) => linesOf(warned(slug)!).map((line) => line.larderId);
+  const figuresOf = (slug: string) => {
+    const components = new Map(content.recipes.map((recipe) => [recipe.id, recipe.document]));
+    const recipe = content.recipes.find((candidate) => candidate.slug === slug);
+    return recipe && computeFigures(recipe.document, { larder: LARDER_BY_ID, components });
+  };
 
-    expect(larderIds('whitecap-sour')).toContain('egg-white');
-    expect(warned('whitecap-sour')?.document.extraCautions).toContain('raw-egg');
-    expect(larderIds('walnut-bitters')).toContain('walnuts');
-    expect(larderIds('clear-harbour')).toContain('whole-milk');
-    expect(warned('lifeboat-toddy')?.document.extraCautions).toContain('spirit-near-heat');
-    expect(warned('kelp-vermouth')?.document.extraCautions).toContain('harmful-botanical');
-    expect(warned('headland-tonic')?.document.extraCautions).toContain('grapefruit-medicines');
+  it.each([
+    { slug: 'whitecap-sour', allergen: 'egg' },
+    { slug: 'walnut-bitters', allergen: 'nuts' },
+    { slug: 'boathouse', allergen: 'nuts' },
+    { slug: 'clear-harbour', allergen: 'milk' },
+    { slug: 'shingle', allergen: 'sulphites' },
+    { slug: 'raspberry-dulse-cordial', allergen: 'crustaceans' },
+  ])('names $allergen in $slug', ({ slug, allergen }) => {
+    expect(figuresOf(slug)?.allergens.map((found) => found.allergen)).toContain(allergen);
+  });
+
+  it.each([
+    { slug: 'whitecap-sour', caution: 'raw-egg' },
+    { slug: 'lifeboat-toddy', caution: 'spirit-near-heat' },
+    { slug: 'buckthorn-cordial', caution: 'hot-sugar' },
+    { slug: 'peel-syrup', caution: 'fresh-keeping' },
+    { slug: 'kelp-vermouth', caution: 'harmful-botanical' },
+    { slug: 'headland-tonic', caution: 'grapefruit-medicines' },
+  ])('warns of $caution in $slug', ({ slug, caution }) => {
+    expect(figuresOf(slug)?.cautions.map((found) => found.caution)).toContain(caution);
+  });
+
+  it('knows the allergens of every line in the book', () => {
+    for (const { slug } of inBook) expect(figuresOf(slug)?.allergensUnknownFor, slug).toEqual([]);
   });
 
   it('has working copies on the way to the book, one with an open query', () => {
