@@ -74,8 +74,8 @@ export function sugarOf(matter: Readonly<Matter>, volume = volumeOf(matter)): nu
 /** The same with so much less or more water that it fills `ml`. What holds no water to lose stays larger than asked. */
 export function withVolume(matter: Readonly<Matter>, ml: number): Matter {
   let result = { ...matter };
-  // Water changes the volume by very nearly its own, so this closes in by three digits a round.
-  for (let round = 0; round < 6; round += 1)
+  // Water changes the volume by very nearly its own, so this closes in by a digit and more a round.
+  for (let round = 0; round < 12; round += 1)
     result = withWater(result, result.water + (ml - volumeOf(result)) * WATER_DENSITY);
   return result;
 }
