@@ -1,4 +1,4 @@
-import type { Figure, Lack, Provenance } from '../contracts/figures.ts';
+import type { Figure, Lack } from '../contracts/figures.ts';
 import type { RecipeDocument } from '../contracts/recipe-document.ts';
 import { tradeMeasuresOf, type EngineContext } from './context.ts';
 import { known, unknown } from './figure.ts';
@@ -18,27 +18,31 @@ export interface Batch {
   composition: Composition;
 }
 
-/** Answers for recipes and, all the way down, for their components; a component that contains itself lacks `component-cycle`. */
-export function batches(context: EngineContext): {
+/** Answers for recipes and, by recipe id, for components; each document is worked out once. */
+export interface Batches {
   of: (document: RecipeDocument) => Batch;
   ofComponent: (id: string) => Batch;
-} {
-  const finished = new Map<string, Batch>();
-  const open = new Set<string>();
+}
 
-  const ofComponent = (id: string): Batch => {
-    const done = finished.get(id);
+/** Batches of recipes and, all the way down, of what they contain; a component that contains itself lacks `component-cycle`. */
+export function batchesIn(context: EngineContext): Batches {
+  const finished = new Map<RecipeDocument, Batch>();
+  const open = new Set<RecipeDocument>();
+
+  const of = (document: RecipeDocument): Batch => {
+    const done = finished.get(document);
     if (done) return done;
-    const document = context.components.get(id);
-    if (!document) return lackingBatch({ code: 'component-missing', subject: '' });
-    if (open.has(id)) return lackingBatch({ code: 'component-cycle', subject: document.title });
-    open.add(id);
-    const batch = of(document);
-    open.delete(id);
-    finished.set(id, batch);
+    if (open.has(document)) return lackingBatch({ code: 'component-cycle', subject: document.title });
+    open.add(document);
+    const batch = makeBatch(document, context, (id) => ofComponent(id).composition);
+    open.delete(document);
+    finished.set(document, batch);
     return batch;
   };
-  const of = (document: RecipeDocument) => makeBatch(document, context, (id) => ofComponent(id).composition);
+  const ofComponent = (id: string): Batch => {
+    const document = context.components.get(id);
+    return document ? of(document) : lackingBatch({ code: 'component-missing', subject: id });
+  };
   return { of, ofComponent };
 }
 
@@ -57,15 +61,17 @@ function makeBatch(
   const measured = yieldBySay({ ...document.yield, stated: null, servings: null }, null, trade);
   const filled = measured && losesVolume(document) ? beforeStraining(document, measured.max) : null;
   const mixture = mix(document, context, compositionOf, filled);
-  const rests = [...mixture.rests, ...(filled === null ? [] : [rest('measured-yield')]), ...iceToCome(document)];
-  const how: Provenance = mixture.estimated ? 'estimated' : 'computed';
+  const rests =
+    filled === null
+      ? [...mixture.rests, ...iceToCome(document)]
+      : [...mixture.rests.filter((each) => each !== rest('water-lost-by-time')), rest('measured-yield')];
   const figure = (
     ends: readonly [Matter, Matter],
     measure: (matter: Matter) => number,
     beside: Lack['code'] | null,
   ) => {
     const lacks = lacksFor(document, mixture, beside);
-    return lacks.length > 0 ? unknown(lacks) : known(measure(ends[0]), measure(ends[1]), how, rests);
+    return lacks.length > 0 ? unknown(lacks) : computed(measure(ends[0]), measure(ends[1]), mixture, rests);
   };
   const said = yieldBySay(document.yield, densityOf(mixture), trade);
   return {
@@ -74,6 +80,15 @@ function makeBatch(
     sugar: figure(mixture.sugar, sugarOf, 'strength-missing'),
     composition: compositionFrom(document, mixture),
   };
+}
+
+/** Ends that lie closer than this share are one value. */
+const SPREAD = 1e-6;
+
+/** Guesses on the way only make an estimate where they leave a range; nothing of something rests on nothing. */
+function computed(min: number, max: number, mixture: Mixture, rests: readonly string[]): Figure {
+  if (max === 0) return known(0, 0, 'computed');
+  return known(min, max, mixture.estimated && max - min > SPREAD * max ? 'estimated' : 'computed', rests);
 }
 
 /** What one figure lacks: what is only missing for the other figure does not count; the volume needs neither. */
@@ -119,8 +134,8 @@ function densityOf(mixture: Mixture): number | null {
 
 /** Built over ice, a drink is as strong as stated only until the ice melts. */
 function iceToCome(document: RecipeDocument): string[] {
-  const iced = document.kind === 'drink' && document.ice !== '' && stagesOf(document).length === 0;
-  return iced ? [rest('before-ice')] : [];
+  const iced = document.ice !== '' && !/^(?:none|no)\b/i.test(document.ice);
+  return document.kind === 'drink' && iced && stagesOf(document).length === 0 ? [rest('before-ice')] : [];
 }
 
 /** Kinds of recipe that another one uses as a thing, not as a liquid. */

@@ -1,6 +1,7 @@
-import type { CautionFound, Figure } from '../contracts/figures.ts';
+import type { CautionFound } from '../contracts/figures.ts';
 import type { RecipeDocument } from '../contracts/recipe-document.ts';
 import { CAUTIONS, type Caution } from '../contracts/words.ts';
+import type { Batches } from './batch.ts';
 import type { Caught } from './caught.ts';
 import { allDocuments } from './components.ts';
 import type { EngineContext } from './context.ts';
@@ -8,25 +9,21 @@ import { cautionsOfLines } from './line-cautions.ts';
 import { cautionsOfText } from './text-cautions.ts';
 
 /**
- * The cautions of a recipe and of every component of it, with what each comes from: lines and operations, a few words of the
- * steps, and what the creator added. What is computed cannot be taken away.
+ * The cautions of a recipe and of every component of it, with what each comes from: its own lines, words of its steps, or the
+ * title of a component. What the creator adds comes on top; what is computed cannot be taken away.
  */
-export function findCautions(
-  document: RecipeDocument,
-  context: EngineContext,
-  figuresOfComponent: (id: string) => { strength: Figure; sugar: Figure },
-): CautionFound[] {
+export function findCautions(document: RecipeDocument, context: EngineContext, batches: Batches): CautionFound[] {
   const found = new Map<Caution, Set<string>>();
   for (const each of allDocuments(document, context)) {
     const caught: Caught[] = [
-      ...cautionsOfLines(each, context, figuresOfComponent),
+      ...cautionsOfLines(each, context, batches),
       ...cautionsOfText(each),
       ...each.extraCautions.map((caution) => [caution, null] as const),
     ];
     for (const [caution, from] of caught) {
       const names = found.get(caution) ?? new Set();
-      if (each !== document) names.add(from === null ? each.title : `${from} (${each.title})`);
-      else if (from !== null) names.add(from);
+      const origin = each === document ? from : each.title;
+      if (origin !== null) names.add(origin);
       found.set(caution, names);
     }
   }

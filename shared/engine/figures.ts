@@ -1,7 +1,7 @@
 import type { Figure, Figures, StrengthBand } from '../contracts/figures.ts';
 import type { RecipeDocument } from '../contracts/recipe-document.ts';
 import { allergensUnknownFor, findAllergens } from './allergens.ts';
-import { batches } from './batch.ts';
+import { batchesIn } from './batch.ts';
 import { findCautions } from './cautions.ts';
 import type { EngineContext } from './context.ts';
 import { middleOf } from './figure.ts';
@@ -14,8 +14,8 @@ import { computeTimes } from './times.ts';
  * on the way carries a range and what it rests on. The document is never changed.
  */
 export function computeFigures(document: RecipeDocument, context: EngineContext): Figures {
-  const { of, ofComponent } = batches(context);
-  const { yieldMl, strength, sugar } = of(document);
+  const batches = batchesIn(context);
+  const { yieldMl, strength, sugar } = batches.of(document);
   return {
     yieldMl,
     strength,
@@ -23,7 +23,7 @@ export function computeFigures(document: RecipeDocument, context: EngineContext)
     sugar,
     times: computeTimes(document),
     allergens: findAllergens(document, context),
-    cautions: findCautions(document, context, ofComponent),
+    cautions: findCautions(document, context, batches),
     allergensUnknownFor: allergensUnknownFor(document, context),
   };
 }

@@ -2,8 +2,10 @@ import type { LarderItem } from '../contracts/larder.ts';
 import { NOTHING, volumeWithoutResidue, type Matter } from './matter.ts';
 import { ETHANOL_DENSITY } from './oiml.ts';
 
-/** Natures that are no liquid: what is neither sugar nor stated water in them is a dissolved solid. */
-const DRY = new Set<LarderItem['nature']>(['sugar', 'acid', 'solid', 'other']);
+/** No liquid: what is neither sugar nor stated water in it is a dissolved solid. Vinegar is an acid with water stated. */
+export function isDry({ nature, water }: LarderItem): boolean {
+  return nature === 'sugar' || nature === 'solid' || ((nature === 'acid' || nature === 'other') && !water);
+}
 
 /** Millilitres that a gram of dissolved acid or salt adds: citric acid is near 0.63, table salt near 0.35. Estimate. */
 const DISSOLVED_SOLID_VOLUME = 0.6;
@@ -13,7 +15,7 @@ const shareIn = (per100: LarderItem['sugar']) => (per100?.value ?? 0) / 100;
 /** What so many grams of something that dissolves are made of. Strength and sugar count as 0 where the larder has none. */
 export function matterOfItem(item: LarderItem, grams: number): Matter {
   const sugar = grams * shareIn(item.sugar);
-  if (!item.density || DRY.has(item.nature)) return drySolid(item, grams, sugar);
+  if (!item.density || isDry(item)) return drySolid(item, grams, sugar);
 
   const volume = grams / item.density.value;
   const ethanol = volume * shareIn(item.strength) * ETHANOL_DENSITY;

@@ -22,7 +22,7 @@ export function gramsPerUnit(line: RecipeLine, weighing: Weighing, trade: Readon
   const volume = unit === 'part' ? PART_ML : toMillilitres(1, unit, trade);
   if (volume !== null) return weighing.density === null ? lack('density-missing', line) : volume * weighing.density;
   if (unit !== 'piece') return lack('piece-weight-missing', line);
-  return weighing.pieceWeight ?? lack('piece-weight-missing', line);
+  return weighing.pieceWeight ?? lack(line.unit === null ? 'unit-missing' : 'piece-weight-missing', line);
 }
 
 export function lack(code: Lack['code'], line: Pick<RecipeLine, 'name'>): Lack {

@@ -1,6 +1,7 @@
 import type { Figure } from '../contracts/figures.ts';
 import type { LarderItem } from '../contracts/larder.ts';
 import type { RecipeDocument, RecipeLine, RecipeStep } from '../contracts/recipe-document.ts';
+import type { Batches } from './batch.ts';
 import type { Caught } from './caught.ts';
 import { allLines } from './components.ts';
 import type { EngineContext } from './context.ts';
@@ -27,12 +28,8 @@ interface Watched {
 }
 
 /** Cautions that follow from the document's own lines and the steps they go through. */
-export function cautionsOfLines(
-  document: RecipeDocument,
-  context: EngineContext,
-  figuresOfComponent: (id: string) => { strength: Figure; sugar: Figure },
-): Caught[] {
-  const watched = watch(document, context, figuresOfComponent);
+export function cautionsOfLines(document: RecipeDocument, context: EngineContext, batches: Batches): Caught[] {
+  const watched = watch(document, context, batches);
   return [
     ...name(
       'spirit-near-heat',
@@ -47,7 +44,10 @@ export function cautionsOfLines(
       watched.filter((one) => one.item?.nature === 'egg' && !one.through.some(cooksEgg)),
     ),
     ...name('fresh-keeping', isKept(document) ? watched.filter(isFresh) : []),
-    ...name('sealed-gas-pressure', mayBurst(document) ? watched.filter(isFresh) : []),
+    ...name(
+      'sealed-gas-pressure',
+      isSealed(document) && !isPreserved(batches.of(document).strength) ? watched.filter(mayFerment) : [],
+    ),
     ...(isSealed(document) && document.steps.some((step) => step.operation?.kind === 'carbonate')
       ? ([['sealed-gas-pressure', null]] as const)
       : []),
@@ -55,16 +55,12 @@ export function cautionsOfLines(
   ];
 }
 
-function watch(
-  document: RecipeDocument,
-  context: EngineContext,
-  figuresOfComponent: (id: string) => { strength: Figure; sugar: Figure },
-): Watched[] {
+function watch(document: RecipeDocument, context: EngineContext, batches: Batches): Watched[] {
   const lines = document.sections.flatMap((section) => section.lines);
   const through = stepsThrough(lines, document.steps);
   return lines.map((line) => {
     const item = (line.larderId && context.larder.get(line.larderId)) || null;
-    const figures = line.componentId ? figuresOfComponent(line.componentId) : null;
+    const figures = line.componentId ? batches.ofComponent(line.componentId) : null;
     const inside = line.componentId
       ? allLines({ ...document, sections: [{ id: '', title: '', lines: [line] }] }, context)
       : [];
@@ -122,5 +118,9 @@ const bottles = ({ operation }: RecipeStep) => operation?.kind === 'bottle';
 const isSealed = (document: RecipeDocument) =>
   document.steps.some(({ operation }) => operation?.kind === 'bottle' && operation.sealed);
 
-/** Fresh juice or fruit under a stopper may begin to ferment. */
-const mayBurst = isSealed;
+/** Fresh juice, and fruit that gives up juice, may begin to work under a stopper. */
+const mayFerment = (one: Watched) =>
+  isFresh(one) && (one.item?.nature === 'juice' || (!one.item?.dissolves && one.item?.water !== null));
+
+/** As strong as spirit: nothing works in that. */
+const isPreserved = (strength: Figure) => strength.known && strength.min >= SPIRIT;

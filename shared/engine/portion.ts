@@ -2,7 +2,7 @@ import type { Lack } from '../contracts/figures.ts';
 import type { LarderItem } from '../contracts/larder.ts';
 import type { RecipeDocument, RecipeLine } from '../contracts/recipe-document.ts';
 import { tradeMeasuresOf, type EngineContext } from './context.ts';
-import { juiceOfItem, matterOfItem } from './item-matter.ts';
+import { isDry, juiceOfItem, matterOfItem } from './item-matter.ts';
 import { countsBits, gramsPerUnit, lack, restsOfUnit } from './line-amount.ts';
 import { massOf, NOTHING, shareOf, type Matter } from './matter.ts';
 import { rest } from './rests.ts';
@@ -63,7 +63,10 @@ function ofItem(line: RecipeLine, item: LarderItem, context: EngineContext): Por
     variants: unit,
     lacks: item.dissolves ? lacksOfItem(line, item) : [],
     estimated: !item.dissolves,
-    rests: [...restsOfUnit(line.unit, trade), ...(item.dissolves ? restsOfItem(item) : [rest('fruit-gives-up-juice')])],
+    rests: [
+      ...restsOfUnit(line.unit, trade),
+      ...(item.dissolves ? restsOfItem(item, line, grams) : [rest('fruit-gives-up-juice')]),
+    ],
   });
 }
 
@@ -74,8 +77,13 @@ function lacksOfItem(line: RecipeLine, item: LarderItem): Lack[] {
   ];
 }
 
-function restsOfItem(item: LarderItem): string[] {
-  return item.nature === 'acid' || item.nature === 'solid' ? [rest('dissolved-solids')] : [];
+/** Grams of dissolved acid or salt below which their volume is nothing to speak of. */
+const PINCHES = 5;
+
+function restsOfItem(item: LarderItem, line: RecipeLine, gramsPerUnit: number): string[] {
+  return item.nature !== 'sugar' && isDry(item) && gramsPerUnit * (line.amount?.max ?? 0) > PINCHES
+    ? [rest('dissolved-solids')]
+    : [];
 }
 
 function ofComponent(line: RecipeLine, context: EngineContext, composition: Composition): Portion {

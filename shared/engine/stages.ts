@@ -24,12 +24,17 @@ const ICE_RESTS: Record<IceMethod, RestCode> = {
 
 /**
  * The stages of a recipe in the order of its steps. Ice only counts in a drink, and the last chilling counts, so that a dry
- * shake before it is no dilution; elsewhere stirring is just stirring.
+ * shake before it is no dilution; in what is built in the glass or hot, and in all other kinds, stirring is just stirring.
  */
-export function stagesOf({ kind, steps }: Pick<RecipeDocument, 'kind' | 'steps'>): Stage[] {
-  const iced = kind === 'drink' ? steps.findLast((step) => iceMethodOf(step) !== null) : undefined;
+export function stagesOf({ kind, method, steps }: Pick<RecipeDocument, 'kind' | 'method' | 'steps'>): Stage[] {
+  const chills = (step: RecipeStep) => iceMethodOf(step) !== null && !(isStirredLightly(step) && BUILT.test(method));
+  const iced = kind === 'drink' ? steps.findLast(chills) : undefined;
   return steps.flatMap((step) => reduceStage(step) ?? (step === iced ? iceStage(step) : []));
 }
+
+const BUILT = /\b(?:built|build|hot)\b/i;
+
+const isStirredLightly = ({ operation }: RecipeStep) => operation?.kind === 'stir';
 
 const ICELESS = /\bdry[ -]shak|\b(?:without|no) ice\b/i;
 

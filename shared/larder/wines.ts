@@ -135,6 +135,14 @@ export const VINEGARS = [
     sugar: usda(0.04, '02053'),
     water: usda(94.78, '02053'),
   }),
-  vinegar('rice-vinegar', 'rice vinegar', 239, '02053', { sugar: NO_SUGAR, acid: from(4.5, COMMON) }),
-  vinegar('malt-vinegar', 'malt vinegar', 239, '02053', { sugar: NO_SUGAR, allergens: ['gluten'] }),
+  vinegar('rice-vinegar', 'rice vinegar', 239, '02053', {
+    sugar: NO_SUGAR,
+    acid: from(4.5, COMMON),
+    water: from(95, ESTIMATE),
+  }),
+  vinegar('malt-vinegar', 'malt vinegar', 239, '02053', {
+    sugar: NO_SUGAR,
+    water: from(95, ESTIMATE),
+    allergens: ['gluten'],
+  }),
 ];

@@ -97,6 +97,7 @@ describe('a blend', () => {
     [aLine({ id: 'x', name: 'moss tincture', amount: 10 }), 'not-in-larder'],
     [aLine({ id: 'x', name: 'gin', larderId: 'gin' }), 'amount-missing'],
     [aLine({ id: 'x', name: 'honey', larderId: 'honey', amount: 2, unit: 'piece' }), 'piece-weight-missing'],
+    [aLine({ id: 'x', name: 'sugar', larderId: 'caster-sugar', amount: 1, unit: null }), 'unit-missing'],
     [aLine({ id: 'x', name: 'syrup', componentId: 'nowhere', amount: 10 }), 'component-missing'],
   ])('says what it lacks instead of guessing', (line, code) => {
     const { strength, sugar, yieldMl, band } = figuresOf(aRecipe([pour(50, 'vodka'), line]));
@@ -222,9 +223,11 @@ describe('what is done to it', () => {
     expect(shaken.band).toBe('medium');
   });
 
-  it('a dry shake is no dilution, nor is stirring a syrup', () => {
+  it('a dry shake is no dilution, nor is stirring a syrup or what is built in the glass', () => {
     const dry = [aStep({ id: '1', text: 'Dry shake hard.', operation: { kind: 'shake' } })];
     const stir = [aStep({ id: '1', operation: { kind: 'stir' } })];
+    const built = figuresOf(aRecipe([pour(60, 'gin')], { kind: 'drink', method: 'Built', ice: 'cubes', steps: stir }));
+    expect(ends(built.strength)).toMatchObject({ how: 'computed', rests: ['before-ice'] });
     expect(figuresOf(aRecipe([pour(60, 'gin')], { kind: 'drink', steps: dry })).strength).toMatchObject({
       how: 'computed',
     });
@@ -302,7 +305,7 @@ describe('what is done to it', () => {
     const steps = [aStep({ id: '1', operation: { kind: 'reduce', to } })];
     const { yieldMl } = figuresOf(aRecipe([pour(500, 'water')], { steps }));
     expect(ends(yieldMl).max).toBeCloseTo(ml, 3);
-    expect(yieldMl).toMatchObject({ how: 'estimated' });
+    expect(ends(yieldMl)).toMatchObject({ how: 'computed', rests: expect.arrayContaining(['reduced-to']) });
   });
 
   it('reducing to nobody knows what is not known', () => {

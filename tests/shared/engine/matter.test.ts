@@ -1,6 +1,6 @@
 import fc from 'fast-check';
 import { describe, expect, it } from 'vitest';
-import { matterOfItem } from '../../../shared/engine/item-matter.ts';
+import { isDry, matterOfItem } from '../../../shared/engine/item-matter.ts';
 import {
   blend,
   massOf,
@@ -143,9 +143,7 @@ describe('pouring together', () => {
 });
 
 describe('what the larder says of itself', () => {
-  const liquids = LARDER.filter(
-    (item) => item.dissolves && item.density && !['sugar', 'acid', 'solid', 'other'].includes(item.nature),
-  );
+  const liquids = LARDER.filter((item) => item.dissolves && item.density && !isDry(item));
 
   it.each(liquids.map((item) => [item.name, item] as const))(
     '%s fills its own volume and has its own strength',
