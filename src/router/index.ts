@@ -1,6 +1,6 @@
 import { nextTick } from 'vue';
 import { createRouter, createWebHistory } from 'vue-router';
-import { i18n } from '@/boot/i18n.ts';
+import { i18n, loadArea } from '@/boot/i18n.ts';
 import { setRouteTitle } from '@/composables/useTitle.ts';
 import { focusHeading } from './focus.ts';
 import { guardAccess } from './guards.ts';
@@ -17,6 +17,9 @@ export const router = createRouter({
 });
 
 router.beforeEach(guardAccess);
+router.beforeEach(async (to) => {
+  if (to.meta.area) await loadArea(to.meta.area);
+});
 
 router.afterEach((to, from, failure) => {
   if (failure) return;

@@ -1,3 +1,4 @@
+import type { Area } from '@/locales/en/index.ts';
 import type { Role } from '@shared/contracts/words.ts';
 import 'vue-router';
 
@@ -7,6 +8,8 @@ declare module 'vue-router' {
     title?: string;
     /** Who may come here at all; everyone when absent. The server decides again for everything the page asks for. */
     access?: 'signed-in' | 'staff' | readonly Role[];
+    /** The catalogue this area brings with it. */
+    area?: Area;
     /** Shows drinks: the age check comes first. */
     age?: boolean;
   }

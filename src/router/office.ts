@@ -5,7 +5,7 @@ export const officeRoutes: RouteRecordRaw[] = [
   {
     path: '/office',
     component: () => import('@/layouts/OfficeLayout.vue'),
-    meta: { access: ['admin'] },
+    meta: { access: ['admin'], area: 'office' },
     children: [
       { path: '', redirect: { name: 'people' } },
       {

@@ -5,7 +5,7 @@ export const workroomRoutes: RouteRecordRaw[] = [
   {
     path: '/workroom',
     component: () => import('@/layouts/WorkroomLayout.vue'),
-    meta: { access: 'staff' },
+    meta: { access: 'staff', area: 'workroom' },
     children: [
       { path: '', redirect: { name: 'shoots' } },
       {

@@ -8,6 +8,8 @@ export const common = {
   save: 'Save',
   optional: 'optional',
   notANumber: 'Write a number, like 12 or 12.5.',
+  tooLittle: 'At least {min}.',
+  tooMuch: 'At most {max}.',
   dismiss: 'Dismiss this message',
   paging: 'Pages of this list',
 

@@ -1,9 +1,15 @@
 import { common } from './common.ts';
 import { errors } from './errors.ts';
 import { front } from './front.ts';
-import { office } from './office.ts';
 import { reading } from './reading.ts';
 import { words } from './words.ts';
-import { workroom } from './workroom.ts';
 
-export const en = { common, errors, front, office, reading, words, workroom };
+/** What every page may need. The staff areas bring their own catalogues with them. */
+export const en = { common, errors, front, reading, words };
+
+/** Catalogues that are fetched on entering their area, so that a reader does not carry them. */
+export const areas = {
+  workroom: async () => (await import('./workroom.ts')).workroom,
+  office: async () => (await import('./office.ts')).office,
+};
+export type Area = keyof typeof areas;
