@@ -1,7 +1,7 @@
 import { mkdtemp, readdir, rm } from 'node:fs/promises';
 import { request } from 'node:http';
 import { tmpdir } from 'node:os';
-import nodemailer from 'nodemailer';
+import { createTransport, type SendMailOptions } from 'nodemailer';
 import { afterEach, beforeEach, describe, expect, it } from 'vitest';
 import { startCatcher, type RunningCatcher } from '../../../server/fakes/smtp/catcher.ts';
 import type { Letter } from '../../../server/fakes/smtp/letter.ts';
@@ -27,8 +27,8 @@ async function letters(): Promise<Letter[]> {
   return (await (await fetch(api('/letters'))).json()) as Letter[];
 }
 
-async function post(fields: nodemailer.SendMailOptions): Promise<void> {
-  const transport = nodemailer.createTransport({ host: '127.0.0.1', port: catcher.smtpPort });
+async function post(fields: SendMailOptions): Promise<void> {
+  const transport = createTransport({ host: '127.0.0.1', port: catcher.smtpPort });
   await transport.sendMail({ from: 'Press <press@demo.example>', to: 'reader@demo.example', ...fields });
   transport.close();
 }
