@@ -47,21 +47,27 @@ export function heatPortion(portion: Portion, through: readonly RecipeStep[]): P
 function heatOnce(portion: Portion, step: RecipeStep): Portion {
   const heating = heatingOf(step);
   if (!heating || portion.variants.length === 0) return portion;
-  const spirited = portion.variants.some((matter) => matter.ethanol > 0);
-  const ethanol = spirited ? ethanolKept(heating) : { min: 1, max: 1 };
+  const ethanol = portion.variants.some((matter) => matter.ethanol > 0) ? ethanolKept(heating) : ALL;
   if (!ethanol) return { ...portion, variants: [], lacks: [...portion.lacks, lossUnknown(step)] };
+  const water = reducesToKnown(step) ? ALL : waterKept(heating);
+  if (ethanol === ALL && water === ALL) return portion;
   return {
     ...portion,
-    variants: widest(portion.variants.flatMap((matter) => corners(matter, ethanol, waterKept(heating)))),
+    variants: widest(portion.variants.flatMap((matter) => corners(matter, ethanol, water))),
     estimated: true,
-    rests: [...portion.rests, ...restsOfHeat(step, spirited)],
+    rests: [...portion.rests, ...restsOfHeat(step, ethanol, water)],
   };
 }
 
-function restsOfHeat(step: RecipeStep, spirited: boolean): string[] {
+const ALL: Readonly<Range> = { min: 1, max: 1 };
+
+/** Where the end of reducing is known, its time says nothing of the water. */
+const reducesToKnown = ({ operation }: RecipeStep) => operation?.kind === 'reduce' && operation.to !== null;
+
+function restsOfHeat(step: RecipeStep, ethanol: Range, water: Range): string[] {
   return [
-    rest('water-lost-by-time'),
-    ...(spirited ? [rest('ethanol-lost-by-time')] : []),
+    ...(water === ALL ? [] : [rest('water-lost-by-time')]),
+    ...(ethanol === ALL ? [] : [rest('ethanol-lost-by-time')]),
     ...(step.duration ? [] : [rest('warming-taken-as-minutes', UNTIMED.max)]),
   ];
 }
