@@ -1,7 +1,11 @@
 import type { Route } from './http/registry.ts';
+import { bookRoutes } from './books/books.routes.ts';
+import { editionRoutes } from './editions/editions.routes.ts';
 import { imprintRoutes } from './imprint/imprint.routes.ts';
 import { larderRoutes } from './larder/larder.routes.ts';
 import { descriptionRoutes } from './http/openapi.routes.ts';
+import { plateRoutes } from './plates/plates.routes.ts';
+import { readingRoutes } from './reading/reading.routes.ts';
 import { peopleRoutes } from './people/people.routes.ts';
 import { sessionRoutes } from './people/session.routes.ts';
 
@@ -11,5 +15,9 @@ export const allRoutes: readonly Route[] = [
   ...peopleRoutes,
   ...imprintRoutes,
   ...larderRoutes,
+  ...plateRoutes,
+  ...bookRoutes,
+  ...editionRoutes,
+  ...readingRoutes,
   ...descriptionRoutes,
 ];

@@ -1,6 +1,7 @@
 import type { Task, TaskList } from 'graphile-worker';
 import type { AppContext } from '../context.ts';
 import { pressEdition } from '../editions/press.job.ts';
+import { preparePlate } from '../plates/prepare.job.ts';
 import type { JobName, JobPayloads } from './jobs.ts';
 
 /** Which try this is, for jobs that tell somebody when the last one has failed. */
@@ -13,6 +14,7 @@ type Jobs = { [N in JobName]: Job<N> };
 
 /** Which function does which job. */
 const jobs: Partial<Jobs> = {
+  'prepare-plate': preparePlate,
   'press-edition': pressEdition,
 };
 

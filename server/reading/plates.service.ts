@@ -1,8 +1,8 @@
 import type { BoundPlate } from '../../shared/contracts/editions.ts';
-import type { Rendition } from '../../shared/contracts/plates.ts';
 import type { AppContext } from '../context.ts';
 import type { GateViewer } from '../gate/gate.ts';
-import { FileAnswer } from '../http/file-answer.ts';
+import type { FileAnswer } from '../http/file-answer.ts';
+import { toFileAnswer } from '../plates/plates.service.ts';
 import { findRendition, type RenditionName } from '../plates/rendition-address.ts';
 import { decideRow } from './gate-viewer.ts';
 import { notThere } from './reading.errors.ts';
@@ -46,8 +46,4 @@ function answerRendition({ files }: AppContext, plate: BoundPlate | undefined, n
   const rendition = plate && findRendition(plate.renditions, name);
   if (!rendition) throw notThere();
   return toFileAnswer(files, rendition);
-}
-
-export function toFileAnswer(files: AppContext['files'], { hash, format, bytes }: Rendition): FileAnswer {
-  return new FileAnswer({ type: `image/${format}`, etag: hash, bytes, open: () => files.stream(hash) });
 }
