@@ -10,7 +10,7 @@ import { FLUSH_ORDERS } from './webhooks.ts';
 
 const seconds = z.int().min(0);
 const clockBody = z.union([z.strictObject({ now: seconds }), z.strictObject({ by: seconds })]);
-const advanceBody = z.strictObject({ test_clock: z.string(), to: seconds });
+const advanceBody = z.strictObject({ test_clock: z.string().optional(), to: seconds });
 const faultBody = z.strictObject({
   prefix: z.string().startsWith('/v1/'),
   times: z.int().min(1).default(1),
@@ -106,7 +106,9 @@ export function controlRouter(service: Service): Router {
 
   router.post('/advance', async (req, res) => {
     const { test_clock: clock, to } = advanceBody.parse(req.body);
-    const advanced = await advanceTestClock(db, origin, clock, to);
+    const advanced = clock
+      ? await advanceTestClock(db, origin, clock, to)
+      : { now: await moveClock(db, origin, () => to) };
     deliverer.wake();
     res.json(advanced);
   });

@@ -1,3 +1,4 @@
+import { request } from 'node:http';
 import { Stripe } from 'stripe';
 import { afterAll, beforeAll, describe, expect, it } from 'vitest';
 import { makePrice, sdk, startBench, type Bench } from './stripe-bench.ts';
@@ -179,5 +180,34 @@ describe('the manners of the API', () => {
     expect((await stripe.customers.list()).object).toBe('list');
     await bench.control('/faults', { prefix: '/v1/customers', status: 500, times: 1 });
     expect(await refusal(stripe.customers.list())).toBeInstanceOf(Stripe.errors.StripeAPIError);
+  });
+});
+
+describe('the fake', () => {
+  async function statusFor(path: string, headers: Record<string, string>, method = 'GET'): Promise<number | undefined> {
+    return new Promise((resolve, reject) => {
+      const asked = request(`${bench.fake.origin}${path}`, { method, headers }, (answer) => {
+        answer.resume();
+        resolve(answer.statusCode);
+      });
+      asked.on('error', reject);
+      asked.end(method === 'POST' ? 'by=1' : undefined);
+    });
+  }
+
+  it('answers this machine only, whatever name a page of the web gave it', async () => {
+    expect(await statusFor('/control/clock', { host: 'localhost:1' })).toBe(200);
+    expect(await statusFor('/control/clock', { host: 'pay.demo.example' })).toBe(421);
+  });
+
+  it('takes no order from a form', async () => {
+    const form = { 'content-type': 'application/x-www-form-urlencoded', 'content-length': '4' };
+    expect(await statusFor('/control/clock', form, 'POST')).toBe(415);
+    expect(await statusFor('/checkout/cs_test_x', { ...form, 'sec-fetch-site': 'cross-site' }, 'POST')).toBe(403);
+  });
+
+  it('names what is wrong with an order', async () => {
+    await expect(bench.control('/webhooks', { mode: 'drop' })).rejects.toThrow('mode');
+    await expect(bench.control('/faults', { prefix: '/v2/' })).rejects.toThrow('prefix');
   });
 });

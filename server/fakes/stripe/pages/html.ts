@@ -21,7 +21,7 @@ export function html(parts: TemplateStringsArray, ...values: Value[]): Markup {
 const STYLE = `
   :root { color-scheme: light; font: 16px/1.5 system-ui, sans-serif; color: #1b1b1f; background: #eceef1 }
   body { margin: 0 }
-  .notice { background: #5b2a86; color: #fff; padding: .6rem 1rem; text-align: center; font-weight: 600 }
+  .notice { margin: 0; background: #5b2a86; color: #fff; padding: .6rem 1rem; text-align: center; font-weight: 600 }
   main { max-width: 30rem; margin: 1.5rem auto; padding: 1.5rem; background: #fff; border-radius: .5rem }
   h1 { font-size: 1.3rem; margin: 0 0 1rem } h2 { font-size: 1.05rem; margin: 1.5rem 0 .5rem }
   label { display: block; margin: .8rem 0 .2rem; font-weight: 600 }

@@ -50,7 +50,8 @@ async function replyTo(work: Work, id: string, attempt: Attempt, form: Form): Pr
   const kept = await readKept(work.db, 'checkout.session', id);
   if (attempt.outcome === 'paid') return { to: successAddress(kept.data) };
   if (attempt.outcome === 'challenge') return { to: `/checkout/${id}/challenge` };
-  return { status: 402, page: await checkoutPage(work.db, kept, form, attempt.message) };
+  // 200: a browser would log any other status as an error of its own.
+  return { status: 200, page: await checkoutPage(work.db, kept, form, attempt.message) };
 }
 
 function checkoutRoutes(service: Service, router: Router): void {
@@ -110,7 +111,7 @@ function portalRoutes(service: Service, router: Router): void {
       const message = await useCard(work, session, form);
       return message === null
         ? { to: `/portal/${id}` }
-        : { status: 402, page: await portalPage(work, session, form, message) };
+        : { status: 200, page: await portalPage(work, session, form, message) };
     });
     send(res, reply);
   });
