@@ -35,7 +35,10 @@ const DEFAULTS: ControlSettings = {
 };
 
 export async function readControl(db: Knex): Promise<ControlSettings> {
-  const row = await db.withSchema(SCHEMA).from('control').first<{ settings: Partial<ControlSettings> } | undefined>('settings');
+  const row = await db
+    .withSchema(SCHEMA)
+    .from('control')
+    .first<{ settings: Partial<ControlSettings> } | undefined>('settings');
   return { ...DEFAULTS, ...row?.settings };
 }
 
