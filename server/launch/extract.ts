@@ -1,0 +1,21 @@
+import { readFile } from 'node:fs/promises';
+import { LARDER } from '../../shared/larder/index.ts';
+import { decodeNotes } from '../../shared/notes/decode-notes.ts';
+import { extractDraft } from '../../shared/notes/extract-draft.ts';
+import { readNotes } from '../../shared/notes/read-notes.ts';
+
+/** Prints the draft of a notes file as JSON: `npm run --silent extract -- FILE`. */
+async function main(): Promise<void> {
+  const [file] = process.argv.slice(2);
+  if (!file) throw new Error('Name the notes file: npm run --silent extract -- FILE');
+  const decoded = decodeNotes(await readFile(file));
+  if (!decoded.ok) throw new Error(`${file} cannot be read: ${decoded.reason}`);
+  const notes = await readNotes(decoded.text);
+  if (!notes.ok) throw new Error(`${file} cannot be read: ${notes.reason}`);
+  process.stdout.write(`${JSON.stringify(extractDraft(notes.cues, LARDER), null, 2)}\n`);
+}
+
+main().catch((error: unknown) => {
+  process.stderr.write(`${error instanceof Error ? error.message : String(error)}\n`);
+  process.exit(1);
+});
