@@ -8,6 +8,7 @@ import { plateRoutes } from './plates/plates.routes.ts';
 import { readingRoutes } from './reading/reading.routes.ts';
 import { peopleRoutes } from './people/people.routes.ts';
 import { sessionRoutes } from './people/session.routes.ts';
+import { recipeRoutes } from './recipes/recipes.routes.ts';
 
 /** Every route of the house, one line a feature. */
 export const allRoutes: readonly Route[] = [
@@ -16,6 +17,7 @@ export const allRoutes: readonly Route[] = [
   ...imprintRoutes,
   ...larderRoutes,
   ...plateRoutes,
+  ...recipeRoutes,
   ...bookRoutes,
   ...editionRoutes,
   ...readingRoutes,

@@ -10,6 +10,21 @@ export const recipeQuery = z.strictObject({
   find: z.string().trim().max(120).optional(),
 });
 
+/** What a recipe must have before it can be cleared. */
+export const MISSING_CODES = [
+  'title',
+  'headnote',
+  'lines',
+  'amounts',
+  'steps',
+  'yield',
+  'keeping',
+  'lead-plate',
+  'lead-plate-alt',
+] as const;
+export const missingCode = z.enum(MISSING_CODES);
+export type MissingCode = z.infer<typeof missingCode>;
+
 export const recipeRow = z.object({
   id,
   slug,
@@ -19,7 +34,7 @@ export const recipeRow = z.object({
   revision: z.int(),
   version,
   /** Required fields that are still missing, by code. */
-  missing: z.array(z.string()),
+  missing: z.array(missingCode),
   openQueries: z.int(),
   updatedAt: instant,
 });
@@ -43,7 +58,7 @@ export const recipeView = z.object({
   revision: z.int(),
   document: recipeDocument,
   figures,
-  missing: z.array(z.string()),
+  missing: z.array(missingCode),
   shoot: z.object({ id, title: z.string() }).nullable(),
   /** What this person may do next. */
   transitions: z.array(recipeState),
