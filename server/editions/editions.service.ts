@@ -29,7 +29,11 @@ export async function readEdition(db: Knex, id: string): Promise<EditionView> {
 }
 
 /** Begins a pressing; the job that does it is enqueued in the same transaction. */
-export async function startPressing({ db }: AppContext, bookId: string, personId: string): Promise<EditionView> {
+export async function startPressing(
+  { db }: Pick<AppContext, 'db'>,
+  bookId: string,
+  personId: string,
+): Promise<EditionView> {
   return db.transaction(async (trx) => {
     const book = await lockBook(trx, bookId);
     if (!book) throw bookNotFound();
@@ -44,7 +48,7 @@ export async function startPressing({ db }: AppContext, bookId: string, personId
 
 /** Puts a pressed edition out: from now on, or from each rank's moment, readers read it. */
 export async function issueEdition(
-  { db, now }: AppContext,
+  { db, now }: Pick<AppContext, 'db' | 'now'>,
   { id, personId, opens }: { id: string; personId: string; opens: { rank: number; at: string }[] },
 ): Promise<EditionView> {
   return db.transaction(async (trx) => {

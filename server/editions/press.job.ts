@@ -1,3 +1,4 @@
+import type { Knex } from 'knex';
 import type { AppContext } from '../context.ts';
 import { findBook } from '../books/books.queries.ts';
 import { makeEpub } from '../epub/make-epub.ts';
@@ -8,12 +9,14 @@ import { findEdition, updateEdition, updateProgress } from './editions.queries.t
 import type { EditionRow } from './editions.rows.ts';
 import { takeSnapshot } from './snapshot.ts';
 
+type PressContext = Pick<AppContext, 'db' | 'files' | 'now'>;
+
 /**
  * Presses an edition. Everything before the last transaction can be done again after a kill: nothing of the edition
  * is visible until that transaction has it whole.
  */
 export async function pressEdition(
-  ctx: AppContext,
+  ctx: PressContext,
   { editionId }: { editionId: string },
   attempt: JobAttempt,
 ): Promise<void> {
@@ -29,16 +32,13 @@ export async function pressEdition(
   }
 }
 
-async function press(ctx: AppContext, edition: EditionRow): Promise<void> {
+async function press(ctx: PressContext, edition: EditionRow): Promise<void> {
   const { db, files, now } = ctx;
   await updateProgress(db, edition.id, 5, 'gathering');
-  const snapshot = await db.transaction(
-    async (trx) => {
-      const book = await findBook(trx, edition.book_id);
-      return takeSnapshot(trx, { book: book!, kind: 'edition', number: edition.number });
-    },
-    { isolationLevel: 'repeatable read', readOnly: true },
-  );
+  const snapshot = await inOneView(db, async (view) => {
+    const book = await findBook(view, edition.book_id);
+    return takeSnapshot(view, { book: book!, kind: 'edition', number: edition.number });
+  });
   const hash = canonicalHash(snapshot);
   await updateProgress(db, edition.id, 20, 'typesetting');
   const epub = await makeEpub(snapshot, files, {
@@ -67,4 +67,11 @@ async function press(ctx: AppContext, edition: EditionRow): Promise<void> {
       pressed_at: now(),
     });
   });
+}
+
+/** Reads as of one moment; inside somebody's transaction that is theirs. */
+function inOneView<T>(db: Knex, read: (view: Knex) => Promise<T>): Promise<T> {
+  return db.isTransaction === true
+    ? read(db)
+    : db.transaction(read, { isolationLevel: 'repeatable read', readOnly: true });
 }

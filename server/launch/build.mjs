@@ -6,14 +6,23 @@ import { run } from './run.mjs';
 import { say } from './say.mjs';
 
 const CLIENT_SOURCES = ['src', 'shared', 'public', 'index.html', 'vite.config.ts', 'package-lock.json'];
-const SERVER_SOURCES = ['server', 'shared', 'migrations', 'seeds', 'tsconfig.base.json', 'tsconfig.server.json', 'package-lock.json'];
+const SERVER_SOURCES = [
+  'server',
+  'shared',
+  'migrations',
+  'seeds',
+  'tsconfig.base.json',
+  'tsconfig.server.json',
+  'package-lock.json',
+];
 
 /** Builds client and server where their sources are newer than what was built last, both at once. */
 export async function buildWhenStale() {
   await Promise.all([
     buildOne('client', CLIENT_SOURCES, () => run('npx', ['vite', 'build', '--logLevel', 'warn'])),
     buildOne('server', SERVER_SOURCES, () => {
-      for (const folder of ['server', 'shared', 'migrations', 'seeds']) rmSync(inRoot('dist', folder), { recursive: true, force: true });
+      for (const folder of ['server', 'shared', 'migrations', 'seeds'])
+        rmSync(inRoot('dist', folder), { recursive: true, force: true });
       rmSync(inRoot('dist', 'server.tsbuildinfo'), { force: true });
       return run('npx', ['tsc', '-p', 'tsconfig.server.json']);
     }),

@@ -53,7 +53,10 @@ async function clusterFolder(dataDir) {
   const { uid, gid } = await postgresUser();
   chownSync(folder, uid, gid);
   chmodSync(folder, 0o700);
-  const entered = await run('runuser', ['-u', 'postgres', '--', 'test', '-w', folder], { allowFailure: true, cwd: '/' });
+  const entered = await run('runuser', ['-u', 'postgres', '--', 'test', '-w', folder], {
+    allowFailure: true,
+    cwd: '/',
+  });
   if (entered.code === 0) return folder;
   rmSync(folder, { recursive: true, force: true });
   const own = join('/var/lib/postgresql', `steep-${createHash('sha256').update(dataDir).digest('hex').slice(0, 12)}`);
@@ -98,10 +101,14 @@ async function start(folder, data, fsync) {
     `-p ${port}`,
     '-c listen_addresses=127.0.0.1',
     '-c unix_socket_directories=',
-    ...(fsync ? [] : ['-c fsync=off', '-c synchronous_commit=off', '-c full_page_writes=off', '-c max_connections=200']),
+    ...(fsync
+      ? []
+      : ['-c fsync=off', '-c synchronous_commit=off', '-c full_page_writes=off', '-c max_connections=200']),
   ].join(' ');
   // In a process group of its own, so that Ctrl-C in the terminal does not reach it before the product has ended.
-  await asPostgres('pg_ctl', ['-D', data, '-l', join(folder, 'log'), '-w', '-t', '60', '-o', settings, 'start'], { detached: true });
+  await asPostgres('pg_ctl', ['-D', data, '-l', join(folder, 'log'), '-w', '-t', '60', '-o', settings, 'start'], {
+    detached: true,
+  });
   return /** @type {number} */ (port);
 }
 

@@ -22,7 +22,9 @@ export async function installFromDebian(names) {
   const what = missing.map((need) => need.what).join(', ');
   const packages = missing.flatMap((need) => need.packages);
   if (process.getuid?.() !== 0)
-    throw new Sentence(`${what} is missing. Install it as root: apt-get install -y --no-install-recommends ${packages.join(' ')}`);
+    throw new Sentence(
+      `${what} is missing. Install it as root: apt-get install -y --no-install-recommends ${packages.join(' ')}`,
+    );
   say(`Installing ${what} from Debian (once) …`);
   const env = { ...process.env, DEBIAN_FRONTEND: 'noninteractive' };
   const apt = ['-o', 'DPkg::Lock::Timeout=300', '-qq'];

@@ -20,7 +20,13 @@ export function makeHouse(onDeath) {
   function start({ name, module, env, execArgv = [] }) {
     return new Promise((resolve, reject) => {
       // In a process group of its own: Ctrl-C reaches the launcher, which ends the parts in order.
-      const child = fork(module, [], { cwd: ROOT, env, execArgv, detached: true, stdio: ['ignore', 'ignore', 'inherit', 'ipc'] });
+      const child = fork(module, [], {
+        cwd: ROOT,
+        env,
+        execArgv,
+        detached: true,
+        stdio: ['ignore', 'ignore', 'inherit', 'ipc'],
+      });
       running.push({ name, child });
       child.on('message', (message) => message === 'ready' && resolve());
       child.once('error', (error) => reject(new Sentence(`The ${name} could not be started: ${error.message}`)));

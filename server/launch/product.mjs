@@ -20,7 +20,14 @@ import { readSecrets } from './secrets.mjs';
  * Migrates, seeds an empty database, and starts fakes, worker and server.
  * @param {ProductOptions} options
  */
-export async function startProduct({ port, dataDir, databaseUrl, onDeath, publicUrl = `http://127.0.0.1:${port}`, source }) {
+export async function startProduct({
+  port,
+  dataDir,
+  databaseUrl,
+  onDeath,
+  publicUrl = `http://127.0.0.1:${port}`,
+  source,
+}) {
   mkdirSync(dataDir, { recursive: true });
   const secrets = readSecrets(dataDir);
   const [stripePort, smtpPort, lettersPort] = await freePorts(3);
@@ -43,7 +50,8 @@ export async function startProduct({ port, dataDir, databaseUrl, onDeath, public
     FAKE_SMTP_HTTP_PORT: String(lettersPort),
     WEBHOOK_URL: `http://127.0.0.1:${port}/api/stripe/webhook`,
   };
-  const moduleOf = (/** @type {string} */ name) => (source ? inRoot('server', `${name}.ts`) : inRoot('dist', 'server', `${name}.js`));
+  const moduleOf = (/** @type {string} */ name) =>
+    source ? inRoot('server', `${name}.ts`) : inRoot('dist', 'server', `${name}.js`);
   const execArgv = source?.execArgv ?? ['--enable-source-maps'];
 
   await run(process.execPath, [...(source?.execArgv ?? []), moduleOf('launch/migrate'), '--demo'], { env, show: true });

@@ -10,7 +10,11 @@ import { Sentence } from './say.mjs';
  *   `show` lets its output through to stderr.
  * @returns {Promise<{ code: number, stdout: string, stderr: string }>}
  */
-export function run(command, args, { env = process.env, cwd = ROOT, show = false, allowFailure = false, detached = false } = {}) {
+export function run(
+  command,
+  args,
+  { env = process.env, cwd = ROOT, show = false, allowFailure = false, detached = false } = {},
+) {
   return new Promise((resolve, reject) => {
     const child = spawn(command, args, { cwd, env, detached, stdio: ['ignore', 'pipe', 'pipe'] });
     let stdout = '';
@@ -28,7 +32,11 @@ export function run(command, args, { env = process.env, cwd = ROOT, show = false
       // A daemon that was started may hold the pipes open; its starter's end is what counts.
       const code = exitCode ?? 1;
       if (code !== 0 && !allowFailure)
-        reject(new Sentence(`${command} ${args.join(' ')} ended with ${signal ?? code}.\n${(stderr || stdout).slice(-4000)}`));
+        reject(
+          new Sentence(
+            `${command} ${args.join(' ')} ended with ${signal ?? code}.\n${(stderr || stdout).slice(-4000)}`,
+          ),
+        );
       else resolve({ code, stdout, stderr });
     });
   });

@@ -31,5 +31,7 @@ runMain(async () => {
   if (cluster && !cluster.folder.startsWith(dataDir)) say(`The database lives in ${cluster.folder}.`);
   const product = await startProduct({ port, dataDir, databaseUrl: given ?? cluster?.url ?? '', onDeath: end });
   closing.push(product.stop);
-  process.stdout.write(`Steep & Bind is open at http://127.0.0.1:${port} (demonstration; its letters at /demo/letters). Ctrl-C closes it.\n`);
+  process.stdout.write(
+    `Steep & Bind is open at http://127.0.0.1:${port} (demonstration; its letters at /demo/letters). Ctrl-C closes it.\n`,
+  );
 });
