@@ -9,6 +9,7 @@ import { readingRoutes } from './reading/reading.routes.ts';
 import { peopleRoutes } from './people/people.routes.ts';
 import { sessionRoutes } from './people/session.routes.ts';
 import { recipeRoutes } from './recipes/recipes.routes.ts';
+import { shootRoutes } from './shoots/shoots.routes.ts';
 
 /** Every route of the house, one line a feature. */
 export const allRoutes: readonly Route[] = [
@@ -17,6 +18,7 @@ export const allRoutes: readonly Route[] = [
   ...imprintRoutes,
   ...larderRoutes,
   ...plateRoutes,
+  ...shootRoutes,
   ...recipeRoutes,
   ...bookRoutes,
   ...editionRoutes,
