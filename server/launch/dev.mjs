@@ -1,27 +1,22 @@
 /* `npm run dev`: the same house from its sources; the client by Vite with hot reload, the server restarted on change. */
 import { spawn } from 'node:child_process';
 import { resolve } from 'node:path';
-import { installDependencies } from './dependencies.mjs';
 import { installFromDebian } from './debian.mjs';
+import { installDependencies } from './dependencies.mjs';
 import { inRoot, ROOT } from './paths.mjs';
 import { freePorts, requireFreePort } from './ports.mjs';
-import { runMain } from './say.mjs';
 import { untilEnded } from './until-ended.mjs';
 
-runMain(async () => {
+untilEnded(async ({ closing, end }) => {
   const port = Number(process.env.PORT ?? 8080);
   const dataDir = resolve(process.env.DATA_DIR ?? inRoot('.data'));
-  /** @type {Array<() => Promise<void>>} */
-  const closing = [];
-  const end = untilEnded(async () => {
-    for (const close of closing.reverse()) await close();
-  });
+  const given = process.env.DATABASE_URL;
 
   await requireFreePort(port);
   await installDependencies();
-  if (!process.env.DATABASE_URL) await installFromDebian(['postgres']);
+  if (!given) await installFromDebian(['postgres']);
   const [{ startCluster }, { startProduct }] = await Promise.all([import('./cluster.mjs'), import('./product.mjs')]);
-  const cluster = process.env.DATABASE_URL ? null : await startCluster(dataDir);
+  const cluster = given ? null : await startCluster(dataDir);
   if (cluster) closing.push(cluster.stop);
   const [apiPort] = await freePorts(1);
   const execArgv = ['--import', 'tsx'];
@@ -29,13 +24,13 @@ runMain(async () => {
     port: /** @type {number} */ (apiPort),
     publicUrl: `http://127.0.0.1:${port}`,
     dataDir,
-    databaseUrl: process.env.DATABASE_URL ?? cluster?.url ?? '',
+    databaseUrl: given ?? cluster?.url ?? '',
     onDeath: end,
     source: { execArgv, server: ['--watch', ...execArgv] },
   });
   closing.push(product.stop);
 
-  const vite = spawn('npx', ['vite', '--port', String(port), '--strictPort', '--host', '127.0.0.1'], {
+  const vite = spawn('npx', ['vite', '--port', String(port), '--strictPort'], {
     cwd: ROOT,
     detached: true,
     stdio: ['ignore', 'inherit', 'inherit'],

@@ -1,15 +1,22 @@
+import { Sentence } from './say.mjs';
+
+/** @typedef {{ closing: Array<() => Promise<void>>, end: (sentence?: string) => void }} Opening */
+
 /**
- * Waits for Ctrl-C, SIGTERM or the call of `end`, then does the closing work once and exits.
- * @param {() => Promise<void>} close
- * @returns {(sentence?: string) => void} ends everything, with 1 and the sentence when something died
+ * Opens a house part by part. Ctrl-C, SIGTERM, a failure on the way and the call of `end` do the closing work once, in
+ * reverse order, and exit: with 0 when it was asked for, with 1 and the sentence when something died.
+ * @param {(opening: Opening) => Promise<void>} open
  */
-export function untilEnded(close) {
+export function untilEnded(open) {
+  /** @type {Opening['closing']} */
+  const closing = [];
   let ending = false;
+
   const end = (/** @type {string | undefined} */ sentence) => {
     if (ending) return;
     ending = true;
     if (sentence) process.stderr.write(`${sentence}\n`);
-    close().then(
+    closeAll().then(
       () => process.exit(sentence ? 1 : 0),
       (error) => {
         process.stderr.write(`${String(error?.message ?? error)}\n`);
@@ -17,8 +24,12 @@ export function untilEnded(close) {
       },
     );
   };
-  process.on('SIGINT', () => end());
-  process.on('SIGTERM', () => end());
-  process.on('SIGHUP', () => end());
-  return end;
+  async function closeAll() {
+    for (const close of closing.reverse()) await close();
+  }
+
+  for (const signal of ['SIGINT', 'SIGTERM', 'SIGHUP']) process.on(signal, () => end());
+  open({ closing, end }).catch((error) =>
+    end(error instanceof Sentence ? error.message : String(error?.stack ?? error)),
+  );
 }

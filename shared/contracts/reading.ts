@@ -37,11 +37,12 @@ const teaserFields = {
 export const recipeTeaser = z.object(teaserFields);
 export type RecipeTeaser = z.infer<typeof recipeTeaser>;
 
-/** One line as it is read: what the document says, without its source in the notes. */
-const readLine = recipeSection.shape.lines.element.omit({ source: true });
+/** One line as it is read: what the document says, cut of its source in the notes. */
+const readLine = recipeSection.shape.lines.element.omit({ source: true }).strip();
 const readSection = z.object({ id: z.string(), title: z.string(), lines: z.array(readLine) });
 const readStep = recipeStep
   .omit({ source: true, text: true, plateId: true })
+  .strip()
   .extend({ html: z.string(), plate: picture.nullable() });
 const neighbour = z.object({ slug, title: z.string() }).nullable();
 
