@@ -44,12 +44,18 @@ function toRefusal(error: unknown): Refusal {
     if (error.status === 413) return requestTooLarge({}, error);
     if (error.status < 500) return requestInvalid({ detail: 'The body could not be read.' }, error);
   }
+  if (isUnstorable(error)) return requestInvalid({ detail: 'A text holds a character that cannot be kept.' }, error);
   if (isDatabaseAway(error)) return serverUnready({ headers: { 'Retry-After': '5' } }, error);
   return serverFailed({}, error);
 }
 
 function isHttpError(error: unknown): error is Error & { status: number } {
   return error instanceof Error && 'status' in error && typeof error.status === 'number';
+}
+
+/** PostgreSQL keeps every character of Unicode but U+0000 and lone halves of a pair, as text and as JSON. */
+function isUnstorable(error: unknown): boolean {
+  return error instanceof Error && 'code' in error && (error.code === '22021' || error.code === '22P05');
 }
 
 /** Connection refused or lost, a server that is starting or stopping, or no free connection in time. */

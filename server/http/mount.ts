@@ -18,8 +18,9 @@ export function mountRoutes(routes: readonly Route[], ctx: AppContext): Router {
   for (const route of routes) {
     const place = `${route.method} ${route.path.replace(/:\w+/g, ':')}`;
     if (!ACCESS_RULES.includes(route.access)) throw new Error(`Route ${route.id} states no access rule.`);
+    if (seen.has(route.id)) throw new Error(`Two routes are named ${route.id}.`);
     if (seen.has(place)) throw new Error(`Route ${route.id} stands where another one stands: ${place}.`);
-    seen.add(place);
+    seen.add(place).add(route.id);
     router[route.method](route.path, ...chainOf(route, ctx));
   }
   return router;

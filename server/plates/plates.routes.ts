@@ -34,7 +34,7 @@ export const plateRoutes: Route[] = [
       keepPlates(ctx, { files, personId: viewer.person!.id, shootId: query.shoot ?? null }),
   }),
   defineRoute({
-    id: 'readPlateView',
+    id: 'readPlate',
     method: 'get',
     path: '/api/plates/:id',
     access: 'staff',

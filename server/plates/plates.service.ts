@@ -6,6 +6,7 @@ import { Refusal } from '../errors.ts';
 import { FileAnswer } from '../http/file-answer.ts';
 import { versionConflict } from '../http/http.errors.ts';
 import { addJob } from '../jobs/queue.ts';
+import { refreshRecipesLedBy } from '../recipes/derived.ts';
 import { inspectPicture } from './inspect.ts';
 import { plateInUse, plateNotFound, plateTooLarge } from './plates.errors.ts';
 import { deletePlate, findAllPlates, findPlate, insertPlate, isPlateUsed, updatePlateWords } from './plates.queries.ts';
@@ -67,9 +68,12 @@ export async function readPlate(db: Knex, id: string): Promise<PlateView> {
 
 export async function savePlateWords(db: Knex, id: string, words: PlateWords, expected: number): Promise<PlateView> {
   const before = await readPlate(db, id);
-  const row = await updatePlateWords(db, { id, expected, values: words });
-  if (!row) throw versionConflict({ context: { version: before.version } });
-  return toPlateView(row);
+  return db.transaction(async (trx) => {
+    const row = await updatePlateWords(trx, { id, expected, values: words });
+    if (!row) throw versionConflict({ context: { version: before.version } });
+    await refreshRecipesLedBy(trx, id);
+    return toPlateView(row);
+  });
 }
 
 /** Takes a plate away that nothing shows; released editions keep theirs by content. */

@@ -41,7 +41,7 @@ export const readingRoutes: Route[] = [
     handler: ({ ctx, viewer, params, query }) => readContents(ctx, params.book, toGateViewer(viewer, query.as)),
   }),
   defineRoute({
-    id: 'readRecipe',
+    id: 'readBookRecipe',
     method: 'get',
     path: '/api/reading/:book/:recipe',
     access: 'reader',
@@ -53,7 +53,7 @@ export const readingRoutes: Route[] = [
       readRecipe(ctx, { book: params.book, slug: params.recipe }, toGateViewer(viewer, query.as)),
   }),
   defineRoute({
-    id: 'readPlate',
+    id: 'readBookPlate',
     method: 'get',
     path: '/api/reading/:book/:recipe/plates/:plate/:rendition',
     access: 'reader',
