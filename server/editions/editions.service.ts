@@ -4,6 +4,7 @@ import type { EditionRow as EditionView, Snapshot } from '../../shared/contracts
 import { bookNotFound } from '../books/books.errors.ts';
 import { findPlacements, lockBook, type PlacedRow } from '../books/books.queries.ts';
 import { addJob } from '../jobs/queue.ts';
+import { lockComponentGraph } from '../recipes/component-closure.ts';
 import { bindSnapshot } from './bind.ts';
 import { canonicalHash } from './canonical-hash.ts';
 import { alreadyIssued, editionNotFound, notCleared, notPressed, nothingToPress } from './editions.errors.ts';
@@ -104,6 +105,7 @@ export async function releaseLeaf(
 
 /** A recipe whose working copy is still what was bound is out now; one that was edited since stays a draft. */
 async function putOut(db: Knex, editionId: string): Promise<void> {
+  await lockComponentGraph(db);
   await db.raw(
     `update recipes set state = 'out', version = recipes.version + 1
      from bound_recipes

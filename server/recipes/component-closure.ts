@@ -7,8 +7,8 @@ import { componentIdsOf } from '../../shared/engine/components.ts';
 const COMPONENT_GRAPH = 748_113_001;
 
 /**
- * Makes transactions that change which recipe uses which take their turns. Without it two saves, each sound by itself, could
- * close a ring together. Taken before any recipe's row, so that two savers never wait for each other.
+ * Makes transactions that change which recipe uses which, or several recipes at once, take their turns. Without it two saves,
+ * each sound by itself, could close a ring together. Taken before any recipe's row, so that two of them never wait for each other.
  */
 export async function lockComponentGraph(trx: Knex): Promise<void> {
   await trx.raw('select pg_advisory_xact_lock(?)', [COMPONENT_GRAPH]);

@@ -7,7 +7,7 @@ import type { EngineContext } from '../../shared/engine/context.ts';
 import { computeFigures } from '../../shared/engine/figures.ts';
 import { findLarderItems } from '../larder/larder.queries.ts';
 import { findPlate } from '../plates/plates.queries.ts';
-import { findUsersOf, loadComponentClosure } from './component-closure.ts';
+import { findUsersOf, loadComponentClosure, lockComponentGraph } from './component-closure.ts';
 import { findCurrentDocuments, updateDerived } from './recipes.queries.ts';
 
 /** What the engine needs to know of these documents: their components all the way down and the larder behind every line. */
@@ -44,11 +44,12 @@ export async function refreshUsersOf(db: Knex, recipeId: string): Promise<void> 
 }
 
 /** Finds out again what the recipes led by this plate lack, after its words have changed. */
-export async function refreshRecipesLedBy(db: Knex, plateId: string): Promise<void> {
-  const ids: string[] = await db('recipes')
+export async function refreshRecipesLedBy(trx: Knex, plateId: string): Promise<void> {
+  await lockComponentGraph(trx);
+  const ids: string[] = await trx('recipes')
     .join('revisions', (on) => on.on('revisions.recipe_id', 'recipes.id').andOn('revisions.number', 'recipes.revision'))
     .whereRaw(`revisions.document ->> 'leadPlateId' = ?`, [plateId])
     .pluck('recipes.id');
-  for (const [id, { document }] of await findCurrentDocuments(db, ids))
-    await updateDerived(db, id, { missing: await readMissing(db, document) });
+  for (const [id, { document }] of await findCurrentDocuments(trx, ids))
+    await updateDerived(trx, id, { missing: await readMissing(trx, document) });
 }
