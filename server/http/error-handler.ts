@@ -55,7 +55,8 @@ function isHttpError(error: unknown): error is Error & { status: number } {
 
 /** PostgreSQL keeps every character of Unicode but U+0000 and lone halves of a pair, as text and as JSON. */
 function isUnstorable(error: unknown): boolean {
-  return error instanceof Error && 'code' in error && (error.code === '22021' || error.code === '22P05');
+  if (!(error instanceof Error) || !('code' in error)) return false;
+  return error.code === '22021' || error.code === '22P05' || (error.code === '22P02' && / json$/.test(error.message));
 }
 
 /** Connection refused or lost, a server that is starting or stopping, or no free connection in time. */
