@@ -7,15 +7,21 @@ import {
   type RecipeDocument,
 } from '../contracts/recipe-document.ts';
 
-/** A draft as a recipe document: every line and step keeps its cue and its second of video. */
+/** The most that a recipe document holds; notes of a whole day may say more. */
+const MOST = { lines: 2000, steps: 200, uses: 200, name: 160, prep: 200, text: 4000 };
+
+/**
+ * A draft as a recipe document: every line and step keeps its cue and its second of video. What goes beyond a document's
+ * measure is left in the notes.
+ */
 export function draftToDocument(draft: Draft, { title, kind }: Pick<RecipeDocument, 'title' | 'kind'>): RecipeDocument {
   const blank = emptyRecipeDocument(title, kind);
   const [stated] = draft.yields;
   return {
     ...blank,
     yield: { ...blank.yield, stated: stated ? { amount: stated.amount, unit: stated.unit } : null },
-    sections: [{ id: 's1', title: '', lines: draft.ingredients.map(toLine) }],
-    steps: draft.steps.map(toStep),
+    sections: [{ id: 's1', title: '', lines: draft.ingredients.slice(0, MOST.lines).map(toLine) }],
+    steps: draft.steps.slice(0, MOST.steps).map(toStep),
     keeping: toKeeping(draft.storage),
   };
 }
@@ -24,9 +30,10 @@ function toLine(ingredient: DraftIngredient, index: number): RecipeDocument['sec
   const { name, amount, unit, prep, optional, larderId } = ingredient;
   return {
     id: `l${index + 1}`,
-    ...{ amount, prep, optional, larderId },
+    ...{ amount, optional, larderId },
+    prep: prep.slice(0, MOST.prep),
     unit: amount ? unit : null,
-    name: name.slice(0, 160),
+    name: name.slice(0, MOST.name),
     componentId: null,
     note: '',
     alternativeTo: null,
@@ -38,8 +45,11 @@ function toLine(ingredient: DraftIngredient, index: number): RecipeDocument['sec
 function toStep(step: DraftStep, index: number): RecipeDocument['steps'][number] {
   return {
     id: `t${index + 1}`,
-    text: step.text,
-    uses: step.uses.map((used) => `l${used + 1}`),
+    text: step.text.slice(0, MOST.text),
+    uses: step.uses
+      .filter((used) => used < MOST.lines)
+      .slice(0, MOST.uses)
+      .map((used) => `l${used + 1}`),
     operation: step.operation,
     duration: step.durationSec,
     attention: step.passive ? 'waiting' : 'hands-on',

@@ -35,8 +35,9 @@ export function extractDraft(cues: readonly ShootCue[], larder: LarderNames): Dr
 
 /** A heading in capitals, or the words before "cordial", "sour" and their like in the first cues. */
 function titleOf(cues: readonly ShootCue[]): string {
-  const heading = cues.slice(0, 2).find(({ text }) => /^[^a-z]{6,}/.test(text));
-  if (heading) return capitalise(/^[^a-z(]+/.exec(heading.text)![0].trim().toLowerCase());
+  const beginnings = cues.slice(0, 2).map(({ text }) => /^[^a-z(]{6,}/.exec(text)?.[0].trim() ?? '');
+  const heading = beginnings.find((text) => /\p{Lu}{2}/u.test(text));
+  if (heading) return capitalise(heading.toLowerCase());
   for (const { text } of cues.slice(0, 4)) {
     const named =
       /((?:[\p{L}'’-]+(?: and | & | ))?[\p{L}'’-]+(?: [\p{L}'’-]+)? (?:cordial|syrup|shrub|liqueur|bitters|vermouth|sour|highball|orgeat|infusion|gin))\b/iu.exec(

@@ -29,7 +29,13 @@ export function readQuantities(text: string): ReadCue {
     if (quantity) quantities.push(quantity);
     index = quantity ? quantity.to : index + 1;
   }
-  return { tokens, quantities: withoutCorrected(text, tokens, quantities) };
+  return { tokens, quantities: withoutCorrected(text, tokens, quantities).filter(isPossible) };
+}
+
+/** Whether a recipe could hold it: a finite number, a temperature that a bar can reach. "1/0 cup" and "5000 degrees" are slips. */
+function isPossible({ kind, value: { min, max } }: Quantity): boolean {
+  if (!Number.isFinite(min) || !Number.isFinite(max)) return false;
+  return kind !== 'temperature' || (min >= -200 && max <= 300);
 }
 
 function quantityAt(tokens: readonly Token[], index: number): Quantity | null {
