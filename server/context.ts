@@ -2,6 +2,7 @@ import type { Knex } from 'knex';
 import { pino, type Logger } from 'pino';
 import { openDatabase } from './db/connection.ts';
 import { openFileStore, type FileStore } from './files/file-store.ts';
+import { openMailer, type Mailer } from './mail/mailer.ts';
 import { openStripe, type StripeClient } from './payments/stripe-client.ts';
 import type { Settings } from './settings.ts';
 
@@ -12,6 +13,7 @@ export interface AppContext {
   log: Logger;
   files: FileStore;
   stripe: StripeClient;
+  mail: Mailer;
   /** The one clock. */
   now: () => Date;
 }
@@ -24,6 +26,7 @@ export function makeContext(settings: Settings, overrides: Partial<AppContext> =
     log: overrides.log ?? pino({ level: settings.mode === 'test' ? 'silent' : 'info' }, pino.destination(2)),
     files: overrides.files ?? openFileStore(settings.dataDir),
     stripe: overrides.stripe ?? openStripe(settings.stripe),
+    mail: overrides.mail ?? openMailer(settings.mail),
     now: overrides.now ?? (() => new Date()),
   };
 }

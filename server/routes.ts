@@ -8,6 +8,10 @@ import { plateRoutes } from './plates/plates.routes.ts';
 import { readingRoutes } from './reading/reading.routes.ts';
 import { peopleRoutes } from './people/people.routes.ts';
 import { sessionRoutes } from './people/session.routes.ts';
+import { demoLetterRoutes } from './demo/letters.routes.ts';
+import { membershipRoutes } from './memberships/memberships.routes.ts';
+import { paymentRoutes } from './payments/payments.routes.ts';
+import { tierRoutes } from './tiers/tiers.routes.ts';
 import { recipeRoutes } from './recipes/recipes.routes.ts';
 import { shootRoutes } from './shoots/shoots.routes.ts';
 
@@ -23,5 +27,9 @@ export const allRoutes: readonly Route[] = [
   ...bookRoutes,
   ...editionRoutes,
   ...readingRoutes,
+  ...tierRoutes,
+  ...paymentRoutes,
+  ...membershipRoutes,
+  ...demoLetterRoutes,
   ...descriptionRoutes,
 ];

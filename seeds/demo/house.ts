@@ -33,4 +33,5 @@ export async function seedHouse(db: Knex, { imprint, tiers }: DemoContent): Prom
       .returning('id');
     await addJob(db, 'sync-tier', { tierId: row!.id });
   }
+  await addJob(db, 'join-demo-members', {});
 }

@@ -6,5 +6,6 @@ export interface JobPayloads {
   'sync-tier': { tierId: string };
   'converge-customer': { stripeCustomer: string };
   'reconcile-payments': Record<string, never>;
+  'join-demo-members': Record<string, never>;
 }
 export type JobName = keyof JobPayloads;

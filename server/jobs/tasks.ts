@@ -1,6 +1,10 @@
 import type { Task, TaskList } from 'graphile-worker';
 import type { AppContext } from '../context.ts';
+import { joinDemoMembers } from '../demo/demo-members.job.ts';
 import { pressEdition } from '../editions/press.job.ts';
+import { sendLetter } from '../letters/send-letter.job.ts';
+import { convergeCustomer, reconcilePayments } from '../payments/reconcile.job.ts';
+import { syncTier } from '../payments/sync-tier.job.ts';
 import { preparePlate } from '../plates/prepare.job.ts';
 import type { JobName, JobPayloads } from './jobs.ts';
 
@@ -13,9 +17,14 @@ type Job<N extends JobName> = (ctx: AppContext, payload: JobPayloads[N], attempt
 type Jobs = { [N in JobName]: Job<N> };
 
 /** Which function does which job. */
-const jobs: Partial<Jobs> = {
+const jobs: Jobs = {
+  'send-letter': sendLetter,
   'prepare-plate': preparePlate,
   'press-edition': pressEdition,
+  'sync-tier': syncTier,
+  'converge-customer': convergeCustomer,
+  'reconcile-payments': reconcilePayments,
+  'join-demo-members': joinDemoMembers,
 };
 
 /** The nightly reconciliation with the payment service. */

@@ -62,6 +62,7 @@ export const ERROR_CODES = [
   'checkout.not_verified',
   'checkout.already_member',
   'checkout.tier_closed',
+  'checkout.tier_waiting',
   'payments.unavailable',
   'payments.signature',
   'membership.none',

@@ -17,6 +17,7 @@ export const subscriptionState = z.enum(SUBSCRIPTION_STATES);
 export type SubscriptionState = z.infer<typeof subscriptionState>;
 
 export const paymentInterval = z.enum(['month', 'year']);
+export type PaymentInterval = z.infer<typeof paymentInterval>;
 
 /** A member's relation to the house, as the account page shows it. */
 export const membershipView = z.object({

@@ -106,6 +106,7 @@ export const errors = {
     not_verified: 'Confirm your e-mail address before you join.',
     already_member: 'You hold a membership already. Change it on your account page.',
     tier_closed: 'This tier takes no new members.',
+    tier_waiting: 'This tier is just being changed. Try again in a moment.',
   },
   payments: {
     unavailable: 'The payment service does not answer. Nothing was charged; try again in a moment.',
