@@ -57,6 +57,8 @@ export async function up(db: Knex): Promise<void> {
       figures jsonb not null,
       missing text[] not null default '{}',
       shoot_id uuid,
+      -- Whatever was released before this moment is hidden from readers, also after the recipe is taken up again.
+      withdrawn_at timestamptz,
       version integer not null default 1,
       created_at timestamptz not null default now(),
       updated_at timestamptz not null default now(),

@@ -34,7 +34,7 @@ const READABLE = `
     bound_recipes.recipe_id, bound_recipes.edition_id, bound_recipes.slug, bound_recipes.title,
     bound_recipes.chapter_id, bound_recipes.position, bound_recipes.access,
     editions.kind as edition_kind, editions.number as edition_number, editions.opens,
-    books.title as book_title, recipes.state = 'withdrawn' as withdrawn
+    books.title as book_title, coalesce(recipes.withdrawn_at >= editions.issued_at, false) as withdrawn
   from books
   join editions on editions.book_id = books.id and editions.state = 'issued'
   join bound_recipes on bound_recipes.edition_id = editions.id

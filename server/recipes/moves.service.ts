@@ -15,7 +15,7 @@ import { holdRecipe, readRecipe } from './recipes.service.ts';
 
 /** Sends a recipe along its path; clearing asks that no query is open and nothing required is missing. */
 export async function moveRecipe(
-  { db }: AppContext,
+  { db, now }: AppContext,
   { id, to, expected, viewer }: { id: string; to: RecipeState; expected: number; viewer: Viewer },
 ): Promise<RecipeView> {
   return db.transaction(async (trx) => {
@@ -24,7 +24,7 @@ export async function moveRecipe(
     if (roles.length === 0) throw transitionRefused({ context: { from: recipe.state, to } });
     if (!hasRole(viewer, ...roles)) throw roleMissing();
     if (to === 'cleared') await refuseUnready(trx, recipe);
-    await updateRecipe(trx, id, { state: to });
+    await updateRecipe(trx, id, { state: to, ...(to === 'withdrawn' ? { withdrawn_at: now() } : {}) });
     return readRecipe(trx, id, viewer);
   });
 }

@@ -74,7 +74,7 @@ export async function lockRecipe(db: Knex, id: string): Promise<RecipeRow | unde
 
 export async function insertRecipe(
   db: Knex,
-  values: Omit<RecipeRow, 'id' | 'version' | 'created_at'> & Partial<RecipeRow>,
+  values: Omit<RecipeRow, 'id' | 'version' | 'created_at' | 'withdrawn_at'> & Partial<RecipeRow>,
 ): Promise<RecipeRow> {
   try {
     const [row] = await db('recipes').insert(values).returning('*');

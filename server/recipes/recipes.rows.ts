@@ -13,6 +13,7 @@ export interface RecipeRow {
   figures: Figures;
   missing: MissingCode[];
   shoot_id: string | null;
+  withdrawn_at: Date | null;
   version: number;
   created_at: Date;
   /** When its text was last saved. */
