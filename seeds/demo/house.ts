@@ -23,7 +23,7 @@ export async function seedPeople(db: Knex): Promise<DemoPeople> {
   return people as DemoPeople;
 }
 
-/** The imprint and its tiers; the payment service learns of the tiers by their jobs. */
+/** The imprint and its tiers; the payment service learns of the tiers, and of the demo's members, by their jobs. */
 export async function seedHouse(db: Knex, { imprint, tiers }: DemoContent): Promise<void> {
   const { name, currency, zone, ageLimit, graceDays, terms, privacy } = imprint;
   await db('imprint').update({ name, currency, zone, terms, privacy, age_limit: ageLimit, grace_days: graceDays });
@@ -33,5 +33,6 @@ export async function seedHouse(db: Knex, { imprint, tiers }: DemoContent): Prom
       .returning('id');
     await addJob(db, 'sync-tier', { tierId: row!.id });
   }
+  await addJob(db, 'join-demo-members', {});
   await addJob(db, 'join-demo-members', {});
 }
