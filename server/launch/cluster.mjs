@@ -24,7 +24,7 @@ export async function startCluster(dataDir, { fsync = true, port: wanted } = {})
   const folder = await clusterFolder(resolve(dataDir));
   const data = join(folder, 'data');
   const passwordFile = join(folder, 'password');
-  if (!existsSync(join(data, 'PG_VERSION'))) await initialise(folder, data, passwordFile);
+  if (!existsSync(join(data, 'PG_VERSION'))) await initialise(data, passwordFile);
   const password = readFileSync(passwordFile, 'utf8').trim();
   await clearStalePid(data);
 
@@ -72,11 +72,10 @@ async function postgresUser() {
 }
 
 /**
- * @param {string} folder
  * @param {string} data
  * @param {string} passwordFile
  */
-async function initialise(folder, data, passwordFile) {
+async function initialise(data, passwordFile) {
   rmSync(data, { recursive: true, force: true });
   writeFileSync(passwordFile, `${randomBytes(24).toString('hex')}\n`, { mode: 0o600 });
   if (isRoot) {

@@ -1,6 +1,6 @@
 import { Sentence } from './say.mjs';
 
-/** @typedef {{ closing: Array<() => Promise<void>>, end: (sentence?: string) => void }} Opening */
+/** @typedef {{ closing: Array<() => Promise<void>>, end: (sentence?: string | undefined) => void }} Opening */
 
 /**
  * Opens a house part by part. Ctrl-C, SIGTERM, a failure on the way and the call of `end` do the closing work once, in
@@ -12,7 +12,8 @@ export function untilEnded(open) {
   const closing = [];
   let ending = false;
 
-  const end = (/** @type {string | undefined} */ sentence) => {
+  /** @param {string} [sentence] */
+  const end = (sentence) => {
     if (ending) return;
     ending = true;
     if (sentence) process.stderr.write(`${sentence}\n`);

@@ -1,4 +1,4 @@
-import sharp from 'sharp';
+import sharp, { type Sharp } from 'sharp';
 import type TestAgent from 'supertest/lib/agent.js';
 import { beforeAll, describe, expect, it } from 'vitest';
 import { preparePlate } from '../../server/plates/prepare.job.ts';
@@ -12,7 +12,7 @@ beforeAll(async () => {
   editor = await api.as({ roles: ['editor'] });
 });
 
-async function jpeg(width: number, height: number): Promise<sharp.Sharp> {
+async function jpeg(width: number, height: number): Promise<Sharp> {
   return sharp({ create: { width, height, channels: 3, background: '#a8742f' }, limitInputPixels: false }).jpeg();
 }
 
@@ -139,8 +139,9 @@ describe('taking a plate away', () => {
   });
 });
 
-function bytes(response: NodeJS.ReadableStream, done: (error: Error | null, body: Buffer) => void): void {
+function bytes(response: unknown, done: (error: Error | null, body: unknown) => void): void {
   const chunks: Buffer[] = [];
-  response.on('data', (chunk: Buffer) => chunks.push(chunk));
-  response.on('end', () => done(null, Buffer.concat(chunks)));
+  const stream = response as NodeJS.ReadableStream;
+  stream.on('data', (chunk: Buffer) => chunks.push(chunk));
+  stream.on('end', () => done(null, Buffer.concat(chunks)));
 }

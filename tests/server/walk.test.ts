@@ -184,7 +184,7 @@ beforeAll(async () => {
       title: 'A day',
       shot_on: '2026-11-02',
       notes_text: CANARY,
-      cues: JSON.stringify([{ index: 0, startMs: 0, endMs: null, text: CANARY }]),
+      cues: JSON.stringify([{ index: 0, startMs: 0, endMs: null, text: CANARY }]) as never,
       created_by: creator.id,
     })
     .returning('id');
@@ -199,8 +199,8 @@ beforeAll(async () => {
     edition: edition.id,
     plate: lead.id,
     inside: inside.id,
-    shoot: shoot.id,
-    query: query.id,
+    shoot: shoot!.id,
+    query: query!.id,
     person: creator.id,
     tier: (await api.db('tiers').first('id'))?.id ?? ids.book,
   });
@@ -329,17 +329,17 @@ describe('the gate on the walked recipe', () => {
   });
 
   it('hides a withdrawn recipe from every reader at once, and only from readers', async () => {
-    await api.db('recipes').where({ id: ids.recipe }).update({ state: 'withdrawn', withdrawn_at: new Date() });
+    await api.db('recipes').where({ id: ids.recipe! }).update({ state: 'withdrawn', withdrawn_at: new Date() });
     try {
       await agents.get('member of tier 3')!.get('/api/reading/walked/kept-back').expect(404);
       await agents.get('creator')!.get('/api/reading/walked/kept-back').expect(200);
       const contents = await agents.get('member of tier 3')!.get('/api/reading/walked').expect(200);
       expect(contents.text).not.toContain('kept-back');
       // Taken up again as a draft, what was released before stays hidden until the next release.
-      await api.db('recipes').where({ id: ids.recipe }).update({ state: 'draft' });
+      await api.db('recipes').where({ id: ids.recipe! }).update({ state: 'draft' });
       await agents.get('member of tier 3')!.get('/api/reading/walked/kept-back').expect(404);
     } finally {
-      await api.db('recipes').where({ id: ids.recipe }).update({ state: 'out', withdrawn_at: null });
+      await api.db('recipes').where({ id: ids.recipe! }).update({ state: 'out', withdrawn_at: null });
     }
   });
 });
