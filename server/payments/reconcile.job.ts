@@ -25,5 +25,6 @@ export async function reconcilePayments(ctx: AppContext): Promise<void> {
       failures.push(error);
     }
   }
-  if (failures.length > 0) throw new AggregateError(failures, `${failures.length} customers could not be reconciled.`);
+  if (failures.length > 0)
+    throw new AggregateError(failures, `Customers that could not be reconciled: ${failures.length}.`);
 }

@@ -4,6 +4,7 @@ import type TestAgent from 'supertest/lib/agent.js';
 import { afterAll, beforeAll } from 'vitest';
 import type { AppContext } from '../../server/context.ts';
 import { startFake, type RunningFake } from '../../server/fakes/stripe/fake.ts';
+import type { OutgoingLetter } from '../../server/mail/mailer.ts';
 import type { PersonRow } from '../../server/people/people.rows.ts';
 import type { TierDraft, TierView } from '../../shared/contracts/tiers.ts';
 import { PUBLIC_URL, useApi, type TestApi } from './api.ts';
@@ -22,6 +23,8 @@ export const CARDS = {
 
 export interface PaidHouse extends TestApi {
   fake: RunningFake;
+  /** Letters that were sent; nothing leaves the house. */
+  mailed: OutgoingLetter[];
   /** Calls the control plane of the payment fake. */
   control: <T = unknown>(path: string, body: object) => Promise<T>;
   /** Moves the clocks of the house and of the payment fake forward together. */
@@ -47,7 +50,11 @@ export function usePaidHouse(overrides: Partial<AppContext> = {}, env: Record<st
     port = await freePort();
     settings['STRIPE_API_BASE'] = `http://127.0.0.1:${port}`;
   });
-  const house = useApi(settings, { now: () => new Date(Date.now() + ahead), ...overrides }) as PaidHouse;
+  const mailed: OutgoingLetter[] = [];
+  const mail = { send: async (letter: OutgoingLetter) => void mailed.push(letter) };
+  const now = () => new Date(Date.now() + ahead);
+  const house = useApi(settings, { now, mail, ...overrides }) as PaidHouse;
+  house.mailed = mailed;
 
   beforeAll(async () => {
     const webhook = { url: `${house.origin}/api/stripe/webhook`, secret: WEBHOOK_SECRET };
@@ -55,8 +62,9 @@ export function usePaidHouse(overrides: Partial<AppContext> = {}, env: Record<st
     house.control = (path, body) => control(house.fake.origin, path, body);
     house.work = () => runJobs(house);
     house.passDays = async (days) => {
-      ahead += days * DAY;
-      await house.control('/clock', { by: days * 86_400 });
+      const seconds = Math.ceil(days * 86_400);
+      ahead += seconds * 1000;
+      await house.control('/clock', { by: seconds });
     };
     house.deliver = async (order = 'created') => {
       const { deliveries } = await house.control<{ deliveries: { status: number | null }[] }>('/webhooks/flush', {
