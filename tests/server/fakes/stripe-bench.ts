@@ -2,6 +2,7 @@ import { createServer, type Server } from 'node:http';
 import type { AddressInfo } from 'node:net';
 import { Stripe } from 'stripe';
 import { startFake, type RunningFake } from '../../../server/fakes/stripe/fake.ts';
+import { makeDatabase } from '../../support/database.ts';
 
 export const WEBHOOK_SECRET = 'whsec_for_tests';
 
@@ -30,12 +31,6 @@ export interface Bench {
   close: () => Promise<void>;
 }
 
-function databaseUrl(): string {
-  const url = process.env.DATABASE_URL;
-  if (!url) throw new Error('Set DATABASE_URL to a PostgreSQL database the tests may write to.');
-  return url;
-}
-
 /** Starts an empty fake with an endpoint for its webhooks and the official SDK pointed at it. */
 export async function startBench(): Promise<Bench> {
   const arrivals: Arrival[] = [];
@@ -50,8 +45,9 @@ export async function startBench(): Promise<Bench> {
   });
   await new Promise<void>((resolve) => endpoint.listen(0, '127.0.0.1', resolve));
   const { port: hookPort } = endpoint.address() as AddressInfo;
+  const database = await makeDatabase();
   const settings = {
-    databaseUrl: databaseUrl(),
+    databaseUrl: database.url,
     webhook: { url: `http://127.0.0.1:${hookPort}/hook`, secret: WEBHOOK_SECRET },
   };
 
@@ -84,6 +80,7 @@ export async function startBench(): Promise<Bench> {
       await fake.close();
       endpoint.close();
       endpoint.closeAllConnections();
+      await database.drop();
     },
   };
 }
