@@ -1,6 +1,7 @@
 import { mkdtemp, rm } from 'node:fs/promises';
 import { tmpdir } from 'node:os';
 import { join } from 'node:path';
+import { pino } from 'pino';
 import { afterAll, beforeAll, describe, expect, it } from 'vitest';
 import { startCatcher, type RunningCatcher } from '../../server/fakes/smtp/catcher.ts';
 import { composeLetter } from '../../server/letters/compose.ts';
@@ -22,7 +23,7 @@ beforeAll(async () => {
   env['SMTP_URL'] = `smtp://127.0.0.1:${catcher.smtpPort}`;
   env['LETTERS_URL'] = `http://127.0.0.1:${catcher.httpPort}`;
 });
-const house = useApi(env);
+const house = useApi(env, { log: pino({ level: 'silent' }) });
 afterAll(async () => {
   await catcher.close();
   await rm(folder, { recursive: true, force: true });

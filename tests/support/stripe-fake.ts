@@ -1,5 +1,4 @@
-import { createServer } from 'node:net';
-import type { AddressInfo } from 'node:net';
+import { createServer, type AddressInfo } from 'node:net';
 import type TestAgent from 'supertest/lib/agent.js';
 import { afterAll, beforeAll } from 'vitest';
 import type { AppContext } from '../../server/context.ts';
