@@ -28,7 +28,9 @@ export function useRecipeFacts(recipe: MaybeRefOrGetter<ReadingView>, factor: Ma
       const times = { min: stated.amount.min * toValue(factor), max: stated.amount.max * toValue(factor) };
       const { text, plural } = writeAmount(times, stated.unit, locale.value);
       const unit = t(`words.unit.${stated.unit}`, plural > 1 ? 2 : 1);
-      return { label, value: `${text}${NBSP}${unit}`, small: servings, how: t('words.provenance.stated') };
+      // A drink is its own serving.
+      const small = stated.unit === 'drink' ? undefined : servings;
+      return { label, value: `${text}${NBSP}${unit}`, small, how: t('words.provenance.stated') };
     }
     return { label, value: servings ?? t('reading.facts.notStated') };
   }
