@@ -1,6 +1,7 @@
 import { readFile } from 'node:fs/promises';
 import { LARDER } from '../../shared/larder/index.ts';
 import { decodeNotes } from '../../shared/notes/decode-notes.ts';
+import { toDraftJson } from '../../shared/notes/draft-json.ts';
 import { extractDraft } from '../../shared/notes/extract-draft.ts';
 import { readNotes } from '../../shared/notes/read-notes.ts';
 
@@ -12,7 +13,7 @@ async function main(): Promise<void> {
   if (!decoded.ok) throw new Error(`${file} cannot be read: ${decoded.reason}`);
   const notes = await readNotes(decoded.text);
   if (!notes.ok) throw new Error(`${file} cannot be read: ${notes.reason}`);
-  process.stdout.write(`${JSON.stringify(extractDraft(notes.cues, LARDER), null, 2)}\n`);
+  process.stdout.write(`${JSON.stringify(toDraftJson(extractDraft(notes.cues, LARDER)), null, 2)}\n`);
 }
 
 main().catch((error: unknown) => {

@@ -1,10 +1,12 @@
 import { z } from 'zod';
 import { range, temperatureRange } from './primitives.ts';
-import { operation } from './recipe-document.ts';
+import { KEEPING_PLACES, operation } from './recipe-document.ts';
 import { allergen, recipeKind, unit } from './words.ts';
 
 /** Where something was said: the cue's number from 0, its start in milliseconds (null without times), the words themselves. */
 const said = { cue: z.int().min(0), at: z.number().nullable(), words: z.string() };
+/** From 0 to 1: how sure the reader is. */
+const confidence = z.number().min(0).max(1);
 
 export const draftIngredient = z.object({
   ...said,
@@ -16,8 +18,7 @@ export const draftIngredient = z.object({
   amountAt: z.number().nullable(),
   prep: z.string(),
   larderId: z.string().nullable(),
-  /** From 0 to 1: how sure the reader is of name and amount. */
-  confidence: z.number().min(0).max(1),
+  confidence,
 });
 export type DraftIngredient = z.infer<typeof draftIngredient>;
 
@@ -31,6 +32,7 @@ export const draftStep = z.object({
   operation: operation.nullable(),
   /** Numbers of the ingredients that the words name. */
   uses: z.array(z.int()),
+  confidence,
 });
 export type DraftStep = z.infer<typeof draftStep>;
 
@@ -40,6 +42,8 @@ export const draftGap = z.object({
   subject: z.string(),
   cue: z.int().min(0).nullable(),
   at: z.number().nullable(),
+  /** The question in words. */
+  message: z.string(),
 });
 export type DraftGap = z.infer<typeof draftGap>;
 
@@ -50,9 +54,15 @@ export const draft = z.object({
   ingredients: z.array(draftIngredient),
   steps: z.array(draftStep),
   equipment: z.array(z.string()),
-  yields: z.array(z.object({ ...said, amount: range, unit })),
+  yields: z.array(z.object({ ...said, amount: range, unit, confidence })),
   storage: z.array(
-    z.object({ ...said, days: range.nullable(), temperatureC: temperatureRange.nullable(), where: z.string() }),
+    z.object({
+      ...said,
+      days: range.nullable(),
+      temperatureC: temperatureRange.nullable(),
+      where: z.enum(KEEPING_PLACES),
+      confidence,
+    }),
   ),
   allergens: z.array(allergen),
   gaps: z.array(draftGap),

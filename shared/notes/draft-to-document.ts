@@ -1,7 +1,6 @@
 import type { Draft, DraftIngredient, DraftStep } from '../contracts/notes.ts';
 import {
   emptyRecipeDocument,
-  KEEPING_PLACES,
   type Keeping,
   type NoteSource,
   type RecipeDocument,
@@ -64,8 +63,7 @@ function toStep(step: DraftStep, index: number): RecipeDocument['steps'][number]
 function toKeeping(storage: Draft['storage']): Keeping | null {
   const said = storage.find(({ days }) => days !== null) ?? storage[0];
   if (!said) return null;
-  const place = KEEPING_PLACES.find((each) => each === said.where) ?? 'refrigerator';
-  return { place, days: said.days, temperature: said.temperatureC, basis: 'stated', note: '' };
+  return { place: said.where, days: said.days, temperature: said.temperatureC, basis: 'stated', note: '' };
 }
 
 function sourceOf({ cue, at }: { cue: number; at: number | null }): NoteSource | null {

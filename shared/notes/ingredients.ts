@@ -1,128 +1,92 @@
 import type { DraftIngredient } from '../contracts/notes.ts';
-import type { ShootCue } from '../contracts/shoots.ts';
-import { nameAfter, nameBefore } from './phrases.ts';
-import { readQuantities, type Quantity, type ReadCue } from './quantities.ts';
-import { KEEPING_WORDS, YIELD_WORDS } from './step-words.ts';
-import { stem, type Known, type Vocabulary } from './vocabulary.ts';
+import { foldMentions, type Group } from './fold.ts';
+import { linkAmounts } from './link-amounts.ts';
+import { findMentions, type Mention } from './mentions.ts';
+import { BETWEEN, STATES } from './name-words.ts';
+import type { Quantity } from './quantities.ts';
+import { wordsOf, type Transcript } from './tokens.ts';
+import type { Vocabulary } from './vocabulary.ts';
 
-const VESSEL = /^(bottle|jar|jug|pan|saucepan|glass|kilner|swing|flask|tin)/;
-const OPTIONAL = /\b(optional|not needed|if you (like|want|have)|nice but|if the)\b/i;
-const SOMETHING = new Set(['some', 'few', 'little', 'bit', 'plenty', 'plus', 'enough', 'fresh']);
-const MEASURED = new Set([
-  'leaf',
-  'sprig',
-  'strip',
-  'slice',
-  'twist',
-  'stick',
-  'pod',
-  'pinch',
-  'handful',
-  'dash',
-  'drop',
-]);
-
-interface Heard extends DraftIngredient {
-  key: string;
+export interface ReadIngredients {
+  ingredients: DraftIngredient[];
+  /** Named but left out, each once. */
+  leftOut: Mention[];
+  /** Of each ingredient all places that name it. */
+  places: (readonly Mention[])[];
 }
 
-/** Everything that goes in, each once: a later amount for the same thing holds, an earlier place stays. */
-export function readIngredients(cues: readonly ShootCue[], vocabulary: Vocabulary): DraftIngredient[] {
-  const heard: Heard[] = [];
-  for (const cue of cues) for (const found of inCue(cue, vocabulary)) fold(heard, found);
-  return heard.map(({ key: _key, ...ingredient }) => ingredient);
-}
-
-function fold(heard: Heard[], found: Heard): void {
-  const before = heard.find(({ key }) => key === found.key);
-  if (!before) heard.push(found);
-  else if (found.amount) Object.assign(before, { amount: found.amount, unit: found.unit, amountAt: found.at });
-}
-
-function inCue(cue: ShootCue, vocabulary: Vocabulary): Heard[] {
-  const read = readQuantities(cue.text);
-  if (YIELD_WORDS.test(cue.text) && !hasKnown(read, vocabulary)) return [];
-  if (KEEPING_WORDS.test(cue.text) && !read.quantities.some(({ kind }) => kind === 'amount')) return [];
-  const measured = read.quantities.flatMap((quantity, index) => measuredIn(cue, read, index, quantity, vocabulary));
-  const named = new Set(measured.map(({ key }) => key));
-  return [...measured, ...unmeasuredIn(cue, read, vocabulary).filter(({ key }) => !named.has(key))];
-}
-
-function measuredIn(cue: ShootCue, read: ReadCue, index: number, quantity: Quantity, vocabulary: Vocabulary): Heard[] {
-  if (quantity.kind !== 'amount' && quantity.kind !== 'count') return [];
-  const { tokens, quantities } = read;
-  const after = nameAfter(tokens, quantity.to);
-  if (VESSEL.test(after.name)) return [];
-  const known = knownAt(tokens, quantity.to, after.to, vocabulary);
-  if (quantity.kind === 'count') {
-    if (!known) return [];
-  }
-  // A bare "two" before another number's words is no amount of anything.
-  if (after.name === '' || (!known && quantity.unit === null)) {
-    const start = quantities[index - 1]?.to ?? 0;
-    const before = nameBefore(tokens.slice(start), quantity.from - start);
-    return before.name === ''
-      ? []
-      : [hear(cue, quantity, before.name, before.prep, knownAt(tokens, start, quantity.from, vocabulary))];
-  }
-  return [hear(cue, quantity, after.name, after.prep, known)];
-}
-
-/** What the larder knows and the notes only mention: "some honey", "a few bay leaves". Its amount is a gap. */
-function unmeasuredIn(cue: ShootCue, { tokens, quantities }: ReadCue, vocabulary: Vocabulary): Heard[] {
-  const heard: Heard[] = [];
-  for (let index = 1; index < tokens.length; index += 1) {
-    const found = vocabulary.at(tokens, index);
-    if (!found || quantities.some(({ from, to }) => index >= from && index < to)) continue;
-    const before = tokens.slice(Math.max(0, index - 3), index).map(({ word }) => word);
-    if (
-      !before.some((word) => SOMETHING.has(word)) ||
-      before.some((word) => ['no', 'not', 'never', 'without'].includes(word))
-    )
-      continue;
-    heard.push(
-      hear(
-        cue,
-        null,
-        tokens
-          .slice(index, index + found.length)
-          .map(({ word }) => word)
-          .join(' '),
-        '',
-        found.known,
-      ),
-    );
-    index += found.length - 1;
-  }
-  return heard;
-}
-
-function knownAt(tokens: ReadCue['tokens'], from: number, to: number, vocabulary: Vocabulary): Known | null {
-  for (let index = from; index < to; index += 1) {
-    const found = vocabulary.at(tokens, index);
-    if (found) return found.known;
-  }
-  return null;
-}
-
-function hasKnown({ tokens }: ReadCue, vocabulary: Vocabulary): boolean {
-  return knownAt(tokens, 0, tokens.length, vocabulary) !== null;
-}
-
-function hear(cue: ShootCue, quantity: Quantity | null, name: string, prep: string, known: Known | null): Heard {
-  const words = name.split(' ').filter((word) => !MEASURED.has(stem(word)) || name.split(' ').length === 1);
+/** Everything that goes in, each once, and what is only named. `taken` are quantities that measure something else. */
+export function readIngredients(
+  transcript: Transcript,
+  {
+    vocabulary,
+    quantities,
+    taken,
+  }: { vocabulary: Vocabulary; quantities: readonly Quantity[]; taken: ReadonlySet<Quantity> },
+): ReadIngredients {
+  const found = findMentions(transcript, vocabulary);
+  const { mentions, links } = linkAmounts(transcript, { mentions: found, quantities, taken, vocabulary });
+  const groups = foldMentions(transcript, mentions, links);
+  const goesIn = groups.filter((group) => isIn(transcript, group));
   return {
-    key: known?.larderId ?? words.map(stem).join(' '),
-    cue: cue.index,
-    at: cue.startMs,
-    words: cue.text,
-    name,
-    amount: quantity?.value ?? null,
-    unit: quantity ? (quantity.unit ?? (quantity.kind === 'count' ? 'piece' : null)) : null,
-    optional: OPTIONAL.test(cue.text),
-    amountAt: quantity ? cue.startMs : null,
-    prep,
-    larderId: known?.larderId ?? null,
-    confidence: quantity && known ? 0.95 : quantity || known ? 0.7 : 0.4,
+    ingredients: goesIn.map((group) => toIngredient(transcript, group)),
+    leftOut: groups.filter((group) => !goesIn.includes(group) && !isIce(group)).map(({ mentions: [first] }) => first!),
+    places: goesIn.map(({ mentions: all }) => all),
   };
 }
+
+/** Ice belongs to the making, not to the measure. */
+const isIce = ({ name }: Group) => /^(\w+ )?ice( cubes?)?$/.test(name);
+
+function isIn({ typed }: Transcript, group: Group): boolean {
+  if (isIce(group) || group.intermediate) return false;
+  const said = (...ways: Mention['said'][]) => group.mentions.some((mention) => ways.includes(mention.said));
+  if (group.amount && group.sure) return true;
+  if (said('refused')) return false;
+  if (said('added', 'optional')) return group.known !== null || group.mentions.some(({ bare }) => !bare);
+  return typed && group.mentions.some(({ leads, said: way, known }) => leads && way === 'named' && known !== null);
+}
+
+function toIngredient({ tokens, cues }: Transcript, group: Group): DraftIngredient {
+  const first = group.mentions.find(({ said }) => said !== 'refused' && said !== 'told') ?? group.mentions[0]!;
+  const token = tokens[first.from]!;
+  const held = group.amount ? tokens[group.amount.from]! : null;
+  return {
+    cue: token.cue,
+    at: token.at,
+    words: cues[(held ?? token).cue]?.text ?? '',
+    name: group.name,
+    amount: group.amount?.value ?? null,
+    unit: group.amount?.unit ?? null,
+    optional: group.optional,
+    amountAt: held?.at ?? null,
+    prep: prepOf(tokens, group),
+    larderId: group.known?.larderId ?? null,
+    confidence: confidenceOf(group),
+  };
+}
+
+function confidenceOf({ amount, known, sure }: Group): number {
+  if (!amount) return known ? 0.6 : 0.4;
+  return (known ? 0.7 : 0.5) + (sure && amount.near ? 0.25 : 0);
+}
+
+/** States before the name ("fresh", "cold"), or the words after a comma that tell how it is prepared. */
+function prepOf(tokens: Transcript['tokens'], { mentions, amount }: Group): string {
+  const mention = mentions.find(
+    ({ from, to }) => amount && (from >= amount.to ? from - amount.to < 5 : amount.from - to < 8),
+  );
+  if (!mention) return '';
+  let from = mention.from;
+  while (from > 0 && BETWEEN.has(tokens[from - 1]!.word)) from -= 1;
+  const states = tokens.slice(from, mention.from).filter(({ word }) => STATES.has(word));
+  if (states.length > 0) return wordsOf(states);
+  const next = tokens[mention.to]?.text;
+  if (next !== ',' && next !== '(') return '';
+  const after = tokens.slice(mention.to + 1, mention.to + 5);
+  const end = after.findIndex(({ word }) => !/^\p{L}{3,}$/u.test(word));
+  const words = after.slice(0, end < 0 ? after.length : end);
+  return words.some(({ word }) => PREPARED.test(word)) ? wordsOf(words.slice(0, 4)) : '';
+}
+
+const PREPARED = /(ed|torn|cut|fresh|dried|frozen|whole|split|crushed|over)$/;

@@ -1,9 +1,10 @@
 import type { Range } from '../contracts/primitives.ts';
 import type { Unit } from '../contracts/words.ts';
-import { numberAt, tokenise, type Token } from './number-words.ts';
-import { TIME_WORDS, UNIT_WORDS } from './unit-words.ts';
+import { addedAt, numberAt } from './number-words.ts';
+import { wordsOf, type Token } from './tokens.ts';
+import { TIME_WORDS, unitAt } from './unit-words.ts';
 
-/** Something measured in a cue, with the tokens it takes. */
+/** Something measured in the notes, with the tokens it takes. */
 export interface Quantity {
   kind: 'amount' | 'duration' | 'temperature' | 'count' | 'share';
   /** Amount or count in its unit, seconds, or degrees Celsius. */
@@ -11,42 +12,49 @@ export interface Quantity {
   unit: Unit | null;
   from: number;
   to: number;
+  /** "under 60 degrees": only the upper end was said. */
+  cap?: true;
 }
 
-export interface ReadCue {
-  tokens: Token[];
-  quantities: Quantity[];
-}
+/** Read on the last words before the value that holds; "no ice" corrects nothing. */
+const CORRECTION =
+  /(^|[\s-])(no( ?[,.-])*( (sorry|wait|make it|make that))?|sorry|actually|make (that|it)|i mean|rather|scratch that|correction)[\s,.-]*(it's|that's)?$/;
+const SIZE_WORDS = new Set(['good', 'big', 'small', 'little', 'generous', 'scant', 'heaped', 'full', 'tiny', 'fat']);
 
-const CORRECTION = /\b(no|sorry|actually|make that|i mean|rather|scratch that|correction)\b/i;
-
-/** All quantities of a cue in order, corrected ones taken out: "thirty, no, forty grams" is forty grams. */
-export function readQuantities(text: string): ReadCue {
-  const tokens = tokenise(text);
+/** All quantities in order, corrected ones taken out: "thirty, no, forty grams" is forty grams. */
+export function readQuantities(tokens: readonly Token[]): Quantity[] {
   const quantities: Quantity[] = [];
   for (let index = 0; index < tokens.length;) {
-    const quantity = quantityAt(tokens, index);
-    if (quantity) quantities.push(quantity);
-    index = quantity ? quantity.to : index + 1;
+    const ratio = ratioAt(tokens, index);
+    const quantity = ratio ? null : quantityAt(tokens, index);
+    if (quantity && isPossible(quantity)) quantities.push(quantity);
+    index = ratio ?? quantity?.to ?? index + 1;
   }
-  return { tokens, quantities: withoutCorrected(text, tokens, quantities).filter(isPossible) };
+  return withoutCorrected(tokens, quantities);
 }
 
-/** Whether a recipe could hold it: a finite number, a temperature that a bar can reach. "1/0 cup" and "5000 degrees" are slips. */
+/** A recipe can only hold a finite number and a temperature that a bar can reach: "5000 degrees" is a slip. */
 function isPossible({ kind, value: { min, max } }: Quantity): boolean {
   if (!Number.isFinite(min) || !Number.isFinite(max)) return false;
   return kind !== 'temperature' || (min >= -200 && max <= 300);
 }
 
+/** "1:1" and "one to one by weight" say how two things stand to each other. */
+function ratioAt(tokens: readonly Token[], index: number): number | null {
+  const [first, sign, second] = tokens.slice(index, index + 3);
+  if (/^\d/.test(first?.text ?? '') && sign?.text === ':' && /^\d/.test(second?.text ?? '')) return index + 3;
+  const oneToOne = wordsOf(tokens.slice(index, index + 3));
+  return oneToOne === 'one to one' || oneToOne === 'two to one' ? index + 3 : null;
+}
+
 function quantityAt(tokens: readonly Token[], index: number): Quantity | null {
   if (tokens[index]?.word === 'overnight')
     return { kind: 'duration', value: { min: 28_800, max: 43_200 }, unit: null, from: index, to: index + 1 };
-  const article = articleBeforeUnit(tokens, index);
-  const first = article ?? numberAt(tokens, index);
+  const first = articleBeforeUnit(tokens, index) ?? numberAt(tokens, index);
   if (!first) return null;
   let to = index + first.length;
   let value = { min: first.value, max: first.value };
-  const second = article ? null : rangeEnd(tokens, to);
+  const second = rangeEnd(tokens, to, index);
   if (second && second.value > first.value) {
     value = { min: first.value, max: second.value };
     to = second.to;
@@ -56,70 +64,90 @@ function quantityAt(tokens: readonly Token[], index: number): Quantity | null {
 
 /** "a litre", "an ounce", "a good pinch": an article counts as one only before a unit. */
 function articleBeforeUnit(tokens: readonly Token[], index: number) {
-  if (!['a', 'an'].includes(tokens[index]?.word ?? '')) return null;
-  const filler = ['good', 'big', 'small', 'little', 'generous', 'scant', 'heaped'].includes(
-    tokens[index + 1]?.word ?? '',
-  );
-  const length = filler ? 2 : 1;
-  return unitAt(tokens, index + length) || TIME_WORDS[tokens[index + length]?.word ?? ''] ? { value: 1, length } : null;
+  if (!['a', 'an', 'another'].includes(tokens[index]?.word ?? '')) return null;
+  const length = SIZE_WORDS.has(tokens[index + 1]?.word ?? '') ? 2 : 1;
+  const word = tokens[index + length]?.word ?? '';
+  return unitAt(tokens, index + length) || (word.length > 1 && TIME_WORDS[word]) ? { value: 1, length } : null;
 }
 
-function rangeEnd(tokens: readonly Token[], index: number): { value: number; to: number } | null {
-  if (!['to', 'or', '-', '–', 'maybe'].includes(tokens[index]?.word ?? '')) {
-    // "ten minutes, maybe twelve" keeps its unit in the middle; only a comma may stand before "maybe".
-    if (tokens[index]?.text !== ',' || tokens[index + 1]?.word !== 'maybe') return null;
-    return endAt(tokens, index + 2);
-  }
-  return endAt(tokens, index + 1);
+function rangeEnd(tokens: readonly Token[], index: number, start: number): { value: number; to: number } | null {
+  const join = tokens[index]?.word ?? '';
+  const between = join === 'and' && tokens[start - 1]?.word === 'between';
+  const comma = join === ',' && tokens[index + 1]?.word === 'maybe' ? 1 : 0;
+  if (join === ',' && comma === 0) return closeEnd(tokens, index + 1, start);
+  if (!between && comma === 0 && !['to', 'or', '-', '–', 'maybe'].includes(join)) return null;
+  const number = numberAt(tokens, index + 1 + comma);
+  return number ? { value: number.value, to: index + 1 + comma + number.length } : null;
 }
 
-function endAt(tokens: readonly Token[], index: number) {
-  const number = numberAt(tokens, index);
-  return number ? { value: number.value, to: index + number.length } : null;
+/** "sixty, sixty-five degrees": two numbers close together that share what is measured. */
+function closeEnd(tokens: readonly Token[], index: number, start: number): { value: number; to: number } | null {
+  const [first, second] = [numberAt(tokens, start), numberAt(tokens, index)];
+  if (!first || !second || second.value > first.value * 1.6) return null;
+  const to = index + second.length;
+  const shared = TIME_WORDS[tokens[to]?.word ?? ''] !== undefined || degreesAt(tokens, to) !== null;
+  return shared ? { value: second.value, to } : null;
 }
 
+/** What stands after the number tells what it measures. */
 function measuredAs(tokens: readonly Token[], read: { value: Range; from: number; to: number }): Quantity {
   const { value, from, to } = read;
   const next = tokens[to]?.word ?? '';
   const seconds = TIME_WORDS[next];
-  if (seconds && !(next === 's' || next === 'h'))
-    return { kind: 'duration', value: times(value, seconds), unit: null, from, to: to + 1 };
+  if (seconds) {
+    const end = laterEnd(tokens, to + 1, value);
+    return { kind: 'duration', value: times(end.value, seconds), unit: null, from, to: end.to };
+  }
   const degrees = degreesAt(tokens, to);
-  if (degrees) return { kind: 'temperature', value: degrees.toCelsius(value), unit: null, from, to: degrees.to };
+  if (degrees) {
+    const cap = /\b(under|below|no (more|hotter|higher) than|not (over|above)|up to|max(imum)?)( of)?$/;
+    const capped = cap.test(wordsOf(tokens.slice(Math.max(0, from - 4), from)));
+    const celsius = degrees.toCelsius(value);
+    return { kind: 'temperature', value: celsius, unit: null, from, to: degrees.to, ...(capped && { cap: true }) };
+  }
   if (next === '%' || next === 'percent') return { kind: 'share', value, unit: null, from, to: to + 1 };
+  if (next === 'per' && tokens[to + 1]?.word === 'cent') return { kind: 'share', value, unit: null, from, to: to + 2 };
   const unit = unitAt(tokens, to);
-  if (unit) return { kind: 'amount', value, unit: unit.unit, from, to: to + unit.length };
-  return { kind: 'count', value, unit: null, from, to };
+  if (!unit) return { kind: 'count', value, unit: null, from, to };
+  const added = addedAt(tokens, to + unit.length);
+  const whole = added ? { min: value.min + added.value, max: value.max + added.value } : value;
+  return { kind: 'amount', value: whole, unit: unit.unit, from, to: to + unit.length + (added?.length ?? 0) };
+}
+
+/** "eight minutes, maybe ten", "an hour and a half". */
+function laterEnd(tokens: readonly Token[], index: number, value: Range): { value: Range; to: number } {
+  const added = addedAt(tokens, index);
+  if (added) return { value: { min: value.min + added.value, max: value.max + added.value }, to: index + added.length };
+  const comma = tokens[index]?.text === ',' ? 1 : 0;
+  if (!['maybe', 'or', 'to'].includes(tokens[index + comma]?.word ?? '')) return { value, to: index };
+  const number = numberAt(tokens, index + comma + 1);
+  const to = index + comma + 1 + (number?.length ?? 0);
+  if (!number || number.value <= value.max || number.value > value.max * 3) return { value, to: index };
+  const repeated = TIME_WORDS[tokens[to]?.word ?? ''] ? 1 : 0;
+  return { value: { min: value.min, max: number.value }, to: to + repeated };
 }
 
 function degreesAt(tokens: readonly Token[], index: number) {
   const words = tokens.slice(index, index + 3).map(({ word }) => word);
   const sign = words[0] === '°' || words[0] === 'degrees' || words[0] === 'degree';
-  if (!sign && !(words[0] === 'c' || words[0] === 'f')) return null;
-  const scale = sign ? words[1] : words[0];
+  const scale = words[sign ? 1 : 0];
   const named = ['c', 'f', 'celsius', 'fahrenheit', 'centigrade'].includes(scale ?? '');
+  if (!sign && !named) return null;
   const fahrenheit = scale === 'f' || scale === 'fahrenheit';
-  const to = index + (sign ? 1 : 0) + (named ? 1 : 0);
   const toCelsius = ({ min, max }: Range): Range =>
     fahrenheit ? { min: celsius(min), max: celsius(max) } : { min, max };
-  return { to, toCelsius };
+  return { to: index + (sign ? 1 : 0) + (named ? 1 : 0), toCelsius };
 }
 
 const celsius = (fahrenheit: number) => Math.round((fahrenheit - 32) / 1.8);
 const times = ({ min, max }: Range, factor: number): Range => ({ min: min * factor, max: max * factor });
 
-function unitAt(tokens: readonly Token[], index: number): { unit: Unit; length: number } | null {
-  for (const [words, unit] of UNIT_WORDS)
-    if (words.every((word, offset) => tokens[index + offset]?.word === word)) return { unit, length: words.length };
-  return null;
-}
-
 /** Drops what the next quantity corrects; a correction that names no unit keeps the unit of what it corrects. */
-function withoutCorrected(text: string, tokens: readonly Token[], quantities: readonly Quantity[]): Quantity[] {
+function withoutCorrected(tokens: readonly Token[], quantities: readonly Quantity[]): Quantity[] {
   const kept: Quantity[] = [];
   for (const quantity of quantities) {
     const before = kept.at(-1);
-    if (before && corrects(text, tokens, before, quantity)) {
+    if (before && corrects(tokens, before, quantity)) {
       kept.pop();
       kept.push(
         quantity.kind === 'count' && before.unit ? { ...quantity, kind: before.kind, unit: before.unit } : quantity,
@@ -129,8 +157,10 @@ function withoutCorrected(text: string, tokens: readonly Token[], quantities: re
   return kept;
 }
 
-function corrects(text: string, tokens: readonly Token[], before: Quantity, after: Quantity): boolean {
-  const between = text.slice(tokens[before.to - 1]!.end, tokens[after.from]!.start);
-  if (between.length > 40 || !CORRECTION.test(between)) return false;
-  return before.kind === after.kind || before.kind === 'count' || after.kind === 'count';
+function corrects(tokens: readonly Token[], before: Quantity, after: Quantity): boolean {
+  if (after.from - before.to > 14) return false;
+  const between = tokens.slice(before.to, after.from);
+  if (between.some(({ text }) => text === '\n') || !CORRECTION.test(wordsOf(between.slice(-5)))) return false;
+  if (before.kind !== after.kind) return before.kind === 'count' || after.kind === 'count';
+  return before.kind !== 'temperature' || !between.some(({ word }) => word === 'not');
 }

@@ -18,15 +18,16 @@ const TIMED = /^\s*\[?((?:\d{1,2}:)?\d{1,3}:\d{2})\]?[\s–-]+(.+)$/;
 
 /**
  * A shoot's notes as cues: WebVTT (W3C) and SubRip by their own rules, lines that begin with `m:ss` or `h:mm:ss`, or prose, a
- * cue a paragraph line. A file that says it is WebVTT, or that looks like captions, and holds no cue is refused.
+ * cue for each row or paragraph. A file that says it is WebVTT, or that looks like captions, and holds no cue is refused.
  */
 export async function readNotes(text: string): Promise<ReadNotes> {
   const clean = text.replace(/^\uFEFF/, '').replace(/\r\n?/g, '\n');
   if (clean.trim() === '') return { ok: false, reason: 'empty' };
   if (/^WEBVTT(?:[ \t\n]|$)/.test(clean)) return readCaptions(clean, 'webvtt');
   if (ARROW.test(clean)) return readCaptions(clean, 'subrip');
-  const lines = clean.split('\n').filter((line) => line.trim() !== '');
-  return lines.filter((line) => TIMED.test(line)).length >= lines.length / 2 ? readTimed(lines) : readProse(lines);
+  const lines = clean.split('\n');
+  const said = lines.filter((line) => line.trim() !== '');
+  return said.filter((line) => TIMED.test(line)).length >= said.length / 2 ? readTimed(said) : readProse(lines);
 }
 
 async function readCaptions(text: string, format: 'webvtt' | 'subrip'): Promise<ReadNotes> {
@@ -64,8 +65,21 @@ function readTimed(lines: readonly string[]): Notes {
   return { ok: true, format: 'timed-text', cues, warnings };
 }
 
+/** A line this long was wrapped; a shorter one ends where its writer ended it. */
+const WRAPPED = 45;
+const COLUMNS = /\S(\t| {2,})\S/;
+const BULLET = /^\s*([-*•·–]|\d+[.)])\s/;
+
 function readProse(lines: readonly string[]): Notes {
-  const cues = lines.map((line, index) => ({ index, startMs: null, endMs: null, text: line.trim() }));
+  const rows: string[] = [];
+  lines.forEach((line, index) => {
+    if (line.trim() === '') return;
+    const before = lines[index - 1] ?? '';
+    const wrapped = before.trim().length >= WRAPPED && !COLUMNS.test(before);
+    if (wrapped && !BULLET.test(line) && !COLUMNS.test(line)) rows.push(`${rows.pop() ?? ''} ${line.trim()}`.trim());
+    else rows.push(line.trim());
+  });
+  const cues = rows.map((text, index) => ({ index, startMs: null, endMs: null, text }));
   return { ok: true, format: 'prose', cues, warnings: [] };
 }
 

@@ -1,7 +1,8 @@
 import type { Unit } from '../contracts/words.ts';
+import type { Token } from './tokens.ts';
 
 /** How units are said and written; longer phrases first. A spoken ounce of a liquid is told from one by weight later. */
-export const UNIT_WORDS: readonly [words: readonly string[], unit: Unit][] = [
+const UNIT_WORDS: readonly [words: readonly string[], unit: Unit][] = [
   [['fluid', 'ounces'], 'floz'],
   [['fluid', 'ounce'], 'floz'],
   [['fl', 'oz'], 'floz'],
@@ -18,11 +19,13 @@ export const UNIT_WORDS: readonly [words: readonly string[], unit: Unit][] = [
   ...one('tbsp', 'tbsp', 'tablespoon', 'tablespoons'),
   ...one('cup', 'cup', 'cups'),
   ...one('pint', 'pint', 'pints'),
+  ...one('quart', 'quart', 'quarts'),
+  ...one('gill', 'gill', 'gills'),
   ...one('dash', 'dash', 'dashes'),
   ...one('drop', 'drop', 'drops'),
   ...one('barspoon', 'barspoon', 'barspoons'),
   ...one('pinch', 'pinch', 'pinches'),
-  ...one('splash', 'splash'),
+  ...one('splash', 'splash', 'splashes'),
   ...one('part', 'part', 'parts'),
   ...one('leaf', 'leaf', 'leaves'),
   ...one('sprig', 'sprig', 'sprigs'),
@@ -32,10 +35,22 @@ export const UNIT_WORDS: readonly [words: readonly string[], unit: Unit][] = [
   ...one('strip', 'strip', 'strips'),
   ...one('stick', 'stick', 'sticks'),
   ...one('pod', 'pod', 'pods'),
+  ...one('piece', 'piece', 'pieces', 'wheel', 'wheels', 'wedge', 'wedges', 'ribbon', 'ribbons', 'coin', 'coins'),
+  ...one('bottle', 'bottle', 'bottles'),
 ];
 
 function one(unit: Unit, ...words: string[]): [string[], Unit][] {
   return words.map((word) => [[word], unit]);
+}
+
+const BY_FIRST = new Map<string, [words: readonly string[], unit: Unit][]>();
+for (const entry of UNIT_WORDS) BY_FIRST.set(entry[0][0]!, [...(BY_FIRST.get(entry[0][0]!) ?? []), entry]);
+
+/** The unit that is named at this token. */
+export function unitAt(tokens: readonly Token[], index: number): { unit: Unit; length: number } | null {
+  for (const [words, unit] of BY_FIRST.get(tokens[index]?.word ?? '') ?? [])
+    if (words.every((word, offset) => tokens[index + offset]?.word === word)) return { unit, length: words.length };
+  return null;
 }
 
 /** Seconds of each spoken unit of time. */
