@@ -22,6 +22,11 @@ export async function closeSession(): Promise<void> {
   await request('DELETE', '/api/session', anything);
 }
 
+/** Says that the reader has reached the imprint's age limit; the server remembers it. */
+export async function confirmAge(): Promise<void> {
+  await request('POST', '/api/session/age', anything, { body: { oldEnough: true } });
+}
+
 export async function fetchDemoAccounts(): Promise<DemoAccounts> {
   return (await request('GET', '/api/demo/accounts', demoAccounts)).data;
 }

@@ -19,6 +19,12 @@ export const frontRoutes: RouteRecordRaw[] = [
         meta: { title: 'front.title.join' },
       },
       {
+        path: 'join/return',
+        name: 'join-return',
+        component: () => import('@/pages/front/JoinReturnPage.vue'),
+        meta: { title: 'front.title.joinReturn', access: 'signed-in' },
+      },
+      {
         path: 'age',
         name: 'age',
         component: () => import('@/pages/front/AgePage.vue'),

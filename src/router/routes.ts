@@ -5,4 +5,5 @@ import { readingRoutes } from './reading.ts';
 import { workroomRoutes } from './workroom.ts';
 import './meta.ts';
 
-export const routes: RouteRecordRaw[] = [...readingRoutes, ...workroomRoutes, ...officeRoutes, ...frontRoutes];
+// The front door comes first: the bare frame of the reading room also answers to `/`.
+export const routes: RouteRecordRaw[] = [...frontRoutes, ...readingRoutes, ...workroomRoutes, ...officeRoutes];

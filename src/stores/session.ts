@@ -53,11 +53,26 @@ export const useSessionStore = defineStore('session', () => {
     forgetAnswers();
   }
 
-  /** What was answered to one reader must not be shown to the next. */
+  /** What was answered to one reader must not be shown to the next, nor to the same one whose rights have changed. */
   function forgetAnswers(): void {
     for (const entry of cache.getEntries({ active: false })) cache.remove(entry);
     void cache.invalidateQueries();
   }
 
-  return { view, user, tier, roles, isStaff, ageConfirmed, demo, imprint, load, ready, hasRole, signIn, signOut };
+  return {
+    view,
+    user,
+    tier,
+    roles,
+    isStaff,
+    ageConfirmed,
+    demo,
+    imprint,
+    load,
+    ready,
+    hasRole,
+    signIn,
+    signOut,
+    forgetAnswers,
+  };
 });

@@ -1,3 +1,5 @@
+import { GUIDANCE, SENSIBLY } from '@shared/wording/en.ts';
+
 export const common = {
   product: 'Steep & Bind',
   skip: 'Skip to the text',
@@ -12,6 +14,9 @@ export const common = {
   tooMuch: 'At most {max}.',
   dismiss: 'Dismiss this message',
   paging: 'Pages of this list',
+  pagingFrom: '{from}–{to} of {total}',
+  pagingBefore: 'Page before',
+  pagingNext: 'Next page',
 
   theme: {
     toCellar: 'Switch to the cellar theme',
@@ -48,9 +53,8 @@ export const common = {
 
   colophon: {
     sewn: 'Set in Lora and Source Sans, sewn with Steep & Bind.',
-    guidance:
-      'Keeping times are guidance, not a laboratory result. Follow local codes, the maker’s instructions and licensed practice.',
-    sensibly: 'For adults. Drink sensibly.',
+    guidance: GUIDANCE,
+    sensibly: SENSIBLY,
     terms: 'Terms',
     privacy: 'Privacy',
     letters: 'Letters of this demonstration',
