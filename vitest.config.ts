@@ -7,6 +7,7 @@ const alias = { '@shared': folder('./shared'), '@': folder('./src') };
 
 export default defineConfig({
   test: {
+    maxWorkers: 2,
     projects: [
       { test: { name: 'shared', include: ['tests/shared/**/*.test.ts'] }, resolve: { alias } },
       {
@@ -16,7 +17,6 @@ export default defineConfig({
           globalSetup: ['tests/support/global-setup.ts'],
           testTimeout: 30_000,
           hookTimeout: 60_000,
-          maxWorkers: 2,
         },
       },
       {
