@@ -12,6 +12,8 @@ const TURNS = new Set(['so', 'okay', 'ok', 'right', 'now', 'because', 'but', 'um
 const LEAST = 4;
 /** A thought that nobody ended is cut here, in words. */
 const MOST = 40;
+/** From here on the edge of a cue is the better place to cut. */
+const LONG = 25;
 
 export function clausesOf({ tokens, typed }: Transcript): Clause[] {
   const clauses: Clause[] = [];
@@ -24,7 +26,8 @@ export function clausesOf({ tokens, typed }: Transcript): Clause[] {
     if (endsSentence(tokens[index])) {
       close(index);
       from = index + 1;
-    } else if (index - from >= MOST || (!typed && turnsAt(tokens, index, from))) close(index);
+    } else if (index - from >= MOST || (!typed && (turnsAt(tokens, index, from) || edgeAt(tokens, index, from))))
+      close(index);
   }
   close(tokens.length);
   return clauses;
@@ -37,13 +40,5 @@ function turnsAt(tokens: readonly Token[], index: number, from: number): boolean
   return TURNS.has(word) && !(word === 'right' && tokens[index + 1]?.word === 'down');
 }
 
-/** The clause at a token, by halving. */
-export function clauseAt(clauses: readonly Clause[], index: number): number {
-  let [low, high] = [0, clauses.length - 1];
-  while (low < high) {
-    const middle = (low + high + 1) >> 1;
-    if (clauses[middle]!.from <= index) low = middle;
-    else high = middle - 1;
-  }
-  return low;
-}
+const edgeAt = (tokens: readonly Token[], index: number, from: number) =>
+  index - from >= LONG && tokens[index]!.cue !== tokens[index - 1]!.cue;

@@ -130,7 +130,7 @@ function holding(links: readonly Link[], poured: boolean): Link | null {
   const unit = told.find((link) => link.unit !== null && link.unit !== 'bottle')?.unit ?? null;
   let held = null as Link | null;
   for (const link of told) {
-    if (!held) held = link;
+    if (!held || (held.unit === 'bottle' && link.unit !== null && link.unit !== 'bottle')) held = link;
     else if (link.onTop && held.unit === link.unit) held = { ...held, value: sum(held.value, link.value) };
     else if (link.unit === null && held.unit !== null) continue;
     else if (link.unit === 'bottle' && held.unit !== null) continue;

@@ -38,13 +38,18 @@ export function readIngredients(
 /** Ice belongs to the making, not to the measure. */
 const isIce = ({ name }: Group) => /^(\w+ )?ice( cubes?)?$/.test(name);
 
-function isIn({ typed }: Transcript, group: Group): boolean {
+function isIn({ typed, tokens }: Transcript, group: Group): boolean {
   if (isIce(group) || group.intermediate) return false;
   const said = (...ways: Mention['said'][]) => group.mentions.some((mention) => ways.includes(mention.said));
   if (group.amount && group.sure) return true;
   if (said('refused')) return false;
-  if (said('added', 'optional')) return group.known !== null || group.mentions.some(({ bare }) => !bare);
-  return typed && group.mentions.some(({ leads, said: way, known }) => leads && way === 'named' && known !== null);
+  // "add it to the bitters" names what is being made, not the bitters of the larder.
+  const own = ({ bare, known }: Mention) => !bare || (known !== null && known.larderId === group.known?.larderId);
+  if (group.mentions.some((mention) => (mention.said === 'added' || mention.said === 'optional') && own(mention)))
+    return true;
+  // The first typed row is the heading.
+  const heads = ({ from, leads, known }: Mention) => leads && known !== null && tokens[from]!.cue > 0;
+  return typed && group.mentions.some((mention) => mention.said === 'named' && heads(mention));
 }
 
 function toIngredient({ tokens, cues }: Transcript, group: Group): DraftIngredient {

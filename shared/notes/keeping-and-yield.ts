@@ -5,10 +5,10 @@ import { wordsAfter, wordsBefore, wordsOf, type Token, type Transcript } from '.
 const DAY = 86_400;
 
 const YIELD_BEFORE =
-  /\b(makes?|gets?( you)?|yields?|gives?( you)?|comes? (out )?to|you( will|'ll)? get|i got|ended up with|for|(it's|that's)(?= (just )?(over|under|nearly)))( \w+)?( a bit| just)?( about| around| roughly| over| under| nearly)*$/;
+  /\b(makes|make(?= (about|around|roughly))|gets?( you)?|yields?|gives?( you)?|comes? (out )?to|you( will|'ll)? get|i got|ended up with|for|(it's|that's)(?= (just )?(over|under|nearly)))( \w+)?( a bit| just)?( about| around| roughly| over| under| nearly)*$/;
 const YIELD_AFTER =
   /^(is )?(what (i|we|you) (got|get)|of (the |finished )?(syrup|cordial|shrub|liqueur) (out|at the end))\b/;
-const MADE = /\b(makes?|yields?)\b[^.]{0,24}$/;
+const MADE = /\b(makes|yields)\b[^.]{0,24}$/;
 
 /** What the notes say it makes; a measured end ("the bottle says eight fifty") holds over the guess before it. */
 export function readYields(
@@ -23,6 +23,7 @@ export function readYields(
     const made = madeOf(tokens, quantity);
     if (made) {
       taken.add(quantity);
+      if (items.some(({ amount, unit }) => amount.max === made.amount.max && unit === made.unit)) continue;
       items.push({ ...placeOf(tokens, cues, quantity), ...made, confidence: 0.8 });
       if (quantity.kind === 'amount') guess = { quantity, index: items.length - 1 };
     } else if (guess && refines(tokens, guess.quantity, quantity)) {
@@ -104,7 +105,19 @@ export function readStorage(
       confidence: where ? 0.9 : 0.6,
     });
   }
-  return { items, taken };
+  return { items: [...atOnce({ tokens, cues }), ...items], taken };
+}
+
+const AT_ONCE = /^(drink|serve)( it)? (now|at once|straight away|immediately|right away)/;
+
+/** "drink it at once": what is not kept at all. */
+function atOnce({ tokens, cues }: Pick<Transcript, 'tokens' | 'cues'>): Draft['storage'] {
+  const from = tokens.findIndex(
+    ({ word }, index) => (word === 'drink' || word === 'serve') && AT_ONCE.test(wordsAfter(tokens, index, 4)),
+  );
+  if (from < 0) return [];
+  const place = placeOf(tokens, cues, { from });
+  return [{ ...place, days: null, temperatureC: null, where: 'serve-at-once', confidence: 0.8 }];
 }
 
 const lastOf = (words: string, count: number) => words.split(' ').slice(-count).join(' ');
@@ -121,7 +134,7 @@ interface Found<T> {
   taken: ReadonlySet<Quantity>;
 }
 
-function placeOf(tokens: readonly Token[], cues: Transcript['cues'], { from }: Quantity) {
+function placeOf(tokens: readonly Token[], cues: Transcript['cues'], { from }: { from: number }) {
   const { cue, at } = tokens[from]!;
   return { cue, at, words: cues[cue]?.text ?? '' };
 }

@@ -85,7 +85,8 @@ function isMeasure(tokens: readonly Token[], quantity: Quantity, taken: Readonly
 
 /** "half a gram of salt, that's an eighth of a teaspoon": the same in another unit. */
 function saysAgain(tokens: readonly Token[], before: Quantity | undefined, { from, kind }: Quantity): boolean {
-  if (!before || before.kind !== 'amount' || kind !== 'amount' || from - before.to > 9) return false;
+  if (!before || before.kind !== 'amount' || before.unit === 'bottle' || kind !== 'amount' || from - before.to > 9)
+    return false;
   return /\b(that's|that is|which is|call it)( about| around| roughly)?$/.test(wordsBefore(tokens, from, 4));
 }
 
@@ -162,11 +163,12 @@ function countedIn(mention: Mention): Link | null {
 /** "a bay leaf", "cucumber ribbon", "salt, tiny pinch", "strip of orange peel". */
 function impliedOne(tokens: readonly Token[], mention: Mention): Link | null {
   const one = { mention, value: { min: 1, max: 1 }, near: true, implied: true, onTop: false };
-  for (let index = mention.to; index <= mention.to + 2; index += 1) {
+  for (let index = mention.to - 1; index <= mention.to + 2; index += 1) {
+    if (index < mention.to && mention.to - mention.from === 1) continue;
     const unit = unitAt(tokens, index);
     if (unit && IMPLYING.has(unit.unit) && !tokens[index]!.word.endsWith('s'))
       return { ...one, unit: unit.unit, from: index, to: index + 1 };
-    if (!BETWEEN.has(tokens[index]?.word ?? '') && tokens[index]?.text !== ',') break;
+    if (index >= mention.to && !BETWEEN.has(tokens[index]?.word ?? '') && tokens[index]?.text !== ',') break;
   }
   const before = tokens[mention.from - 1]?.word === 'of' ? unitAt(tokens, mention.from - 2) : null;
   if (before && IMPLYING.has(before.unit) && !tokens[mention.from - 2]!.word.endsWith('s'))

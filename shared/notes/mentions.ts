@@ -83,7 +83,7 @@ function knownAt(tokens: readonly Token[], index: number, free: number, vocabula
     known = null;
   }
   if (known === null || from < index) known = vocabulary.named(tokens.slice(from, to).map(({ word }) => word)) ?? known;
-  return { from, to, known, bare: to - from === 1 && HEADS.has(stem(tokens[index]!.word)) };
+  return { from, to, known, bare: to - from === 1 && HEADS.has(tokens[index]!.word) };
 }
 
 /** A noun of the trade with up to two words before it that can only be its own. */

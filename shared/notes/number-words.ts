@@ -107,7 +107,20 @@ function wordsAt(tokens: readonly Token[], index: number): SpokenNumber | null {
   // "three fifty" is 350: a ten after a lone one is a hundred's tail.
   const tail = first.value > 0 && first.value < 10 ? belowHundred(tokens, index + 1) : null;
   if (tail && tail.value >= 10) return { value: first.value * 100 + tail.value, length: 1 + tail.length };
-  return withAdded(tokens, index, first);
+  return decimalOf(tokens, index, first) ?? withAdded(tokens, index, first);
+}
+
+/** "one point two", "nought point five" is said digit by digit. */
+function decimalOf(tokens: readonly Token[], index: number, whole: SpokenNumber): SpokenNumber | null {
+  if (tokens[index + whole.length]?.word !== 'point') return null;
+  const digits: number[] = [];
+  for (let at = index + whole.length + 1; ; at += 1) {
+    const digit = onesOf(tokens[at]?.word);
+    if (digit < 0 || digit > 9) break;
+    digits.push(digit);
+  }
+  if (digits.length === 0) return null;
+  return { value: Number(`${whole.value}.${digits.join('')}`), length: whole.length + 1 + digits.length };
 }
 
 function scaled(tokens: readonly Token[], index: number, first: SpokenNumber, factor: 100 | 1000): SpokenNumber {

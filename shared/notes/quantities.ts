@@ -43,6 +43,7 @@ function isPossible({ kind, value: { min, max } }: Quantity): boolean {
 function ratioAt(tokens: readonly Token[], index: number): number | null {
   const [first, sign, second] = tokens.slice(index, index + 3);
   if (/^\d/.test(first?.text ?? '') && sign?.text === ':' && /^\d/.test(second?.text ?? '')) return index + 3;
+  if (first?.word !== 'one' && first?.word !== 'two') return null;
   const oneToOne = wordsOf(tokens.slice(index, index + 3));
   return oneToOne === 'one to one' || oneToOne === 'two to one' ? index + 3 : null;
 }
@@ -65,6 +66,8 @@ function quantityAt(tokens: readonly Token[], index: number): Quantity | null {
 /** "a litre", "an ounce", "a good pinch": an article counts as one only before a unit. */
 function articleBeforeUnit(tokens: readonly Token[], index: number) {
   if (!['a', 'an', 'another'].includes(tokens[index]?.word ?? '')) return null;
+  // "once a day" tells how often.
+  if (['once', 'twice', 'times'].includes(tokens[index - 1]?.word ?? '')) return null;
   const length = SIZE_WORDS.has(tokens[index + 1]?.word ?? '') ? 2 : 1;
   const word = tokens[index + length]?.word ?? '';
   return unitAt(tokens, index + length) || (word.length > 1 && TIME_WORDS[word]) ? { value: 1, length } : null;

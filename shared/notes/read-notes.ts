@@ -34,21 +34,36 @@ async function readCaptions(text: string, format: 'webvtt' | 'subrip'): Promise<
   const type = format === 'webvtt' ? 'vtt' : 'srt';
   const { cues, errors } = await parseCaptions(text, { type, errors: true });
   const read = withoutRolling(
-    cues.map((cue) => ({ startMs: toMs(cue.startTime), endMs: toMs(cue.endTime), text: plainCue(cue.text) })),
+    cues.map((cue) => ({ startMs: toMs(cue.startTime), endMs: toMs(cue.endTime), lines: plainLines(cue.text) })),
   ).filter((cue) => cue.text !== '');
   if (read.length === 0) return { ok: false, reason: 'no-cues' };
   const warnings = errors.map((error) => `${error.message}${error.line > 0 ? ` (line ${error.line})` : ''}`);
   return { ok: true, format, cues: read.map((cue, index) => ({ index, ...cue })), warnings: warnings.slice(0, 20) };
 }
 
-/** Automatic captions show every line twice as they roll; what the cue before has said already is taken off. */
-function withoutRolling<C extends { text: string }>(cues: readonly C[]): C[] {
-  return cues.map((cue, index) => {
-    const before = cues[index - 1]?.text ?? '';
-    return before !== '' && cue.text.startsWith(`${before} `)
-      ? { ...cue, text: cue.text.slice(before.length + 1) }
-      : cue;
+interface Lines {
+  startMs: number;
+  endMs: number;
+  lines: string[];
+}
+
+/** Rolling captions leave no pause between their cues, in milliseconds. */
+const ROLLING = 500;
+
+/** Automatic captions show every line twice as they roll; the lines that the cue before ended with are taken off. */
+function withoutRolling(cues: readonly Lines[]) {
+  return cues.map(({ startMs, endMs, lines }, index) => {
+    const before = cues[index - 1];
+    const seen = before && startMs - before.endMs < ROLLING ? sharedLines(before.lines, lines) : 0;
+    return { startMs, endMs, text: lines.slice(seen).join(' ') };
   });
+}
+
+/** How many lines at the end of one cue begin the next. */
+function sharedLines(before: readonly string[], lines: readonly string[]): number {
+  for (let count = Math.min(before.length, lines.length); count > 0; count -= 1)
+    if (before.slice(-count).every((line, index) => line === lines[index])) return count;
+  return 0;
 }
 
 function readTimed(lines: readonly string[]): Notes {
@@ -83,14 +98,15 @@ function readProse(lines: readonly string[]): Notes {
   return { ok: true, format: 'prose', cues, warnings: [] };
 }
 
-/** Cue text without tags (`<v Speaker>`, `<00:01.000>`, `<b>`), its character references resolved, on one line. */
-function plainCue(text: string): string {
+/** Lines of a cue without tags (`<v Speaker>`, `<00:01.000>`, `<b>`), their character references resolved. */
+function plainLines(text: string): string[] {
   const names: Record<string, string> = { amp: '&', lt: '<', gt: '>', nbsp: ' ', lrm: '', rlm: '' };
   return text
     .replace(/<[^>]*>/g, '')
     .replace(/&(amp|lt|gt|nbsp|lrm|rlm);/g, (_, name: string) => names[name] ?? '')
-    .replace(/\s+/g, ' ')
-    .trim();
+    .split('\n')
+    .map((line) => line.replace(/\s+/g, ' ').trim())
+    .filter((line) => line !== '');
 }
 
 function toMs(seconds: number): number {

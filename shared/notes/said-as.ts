@@ -16,7 +16,7 @@ const REFUSED_BEFORE = [
   /\b(not using|not use|not add|don't use|don't add|didn't use|not put|skip|avoid|instead of|rather than|out of)( \w+)? $/,
   /\bleave (out )?(the )?$/,
 ];
-const REFUSED_AFTER = [/^\? (no|nope|never)\b/, /^(in (it|this|there) )?no\b/, /^out\b/];
+const REFUSED_AFTER = [/^\? (no|nope|never)\b/, /^(in (it|this|there) )?no\b(?! ?([,.-]|sorry|wait|make))/, /^out\b/];
 /** "or the coconut goes": what happens to it, not what to take. */
 const BEFALLS = /^(goes|gets|is|are|was|will|turns|tastes|comes|has|have)\b/;
 
@@ -28,15 +28,15 @@ const TOLD_BEFORE = [
 /** Serving and the next shoot: what is poured there is no part of this recipe. */
 const TOLD_EARLIER = [
   /\b(what (do|would) (you|i|we) do with (it|this)|how (do|would) (i|you|we) (drink|serve|use) (it|this)|i drink it|to serve)\b/,
-  /\b(used to|old recipe|last time|last year|once tried|i tried)\b[^.?!\n]{0,40}$/,
+  /\b(once tried|i tried|i've tried)\b[^.?!\n]{0,25}$/,
 ];
 
 const OPTIONAL_BEFORE = [
   /\b(you|i|we|some people) (can|could|might|may) (also )?(add|use|put|throw|have|swap)( in)?( [\w/.,½¼-]+){0,8} $/,
-  /\b(optional(ly)?|or|maybe|if you like|for a change)[ ,:]+((use|even|a|an|some|with) )*((\S+ ){1,4}of )?((\w+) )?$/,
+  /\b(optional(ly)?|(?<!\b(\d+|one|two|three|four|five|six|seven|eight|nine|ten|eleven|fifteen|twenty|thirty) )or|maybe|for a change)[ ,:]+((use|even|a|an|some|with) )*((\S+ ){1,4}of )?((\w+) )?$/,
 ];
 const OPTIONAL_AFTER = [
-  /^(\W*[\w'-]+){0,4}\W+(if you (like|want|fancy|must)|if too \w+|optional|not needed|not essential|if using)\b/,
+  /^(?!or\b)(\W*[\w'-]+){0,4}\W+(if you (like|want|fancy|must)|if too \w+|optional|not needed|not essential|if using)\b/,
   /^(\W*[\w'-]+){0,1} instead\b/,
   /^(\W*[\w']+){0,6}\W*(that's|which is|it's) optional\b/,
   /^(work|works)\b[^.]{0,3}\? yes/,
@@ -73,6 +73,6 @@ export const OTHER_DRINK =
 
 /** Amounts that no longer hold: "I used to do fifty". */
 export const PAST =
-  /\b(used to|old recipe|last time|last year|normally|if you (had|have|get|were|made)|i'd use|you'd use|at first|originally)\b( (?!so\b|now\b|but\b|today\b|i've\b)[\w',-]+){0,10} ?$/;
+  /(\bthen i did|\b(used to|old recipe|last time|last year|normally|if you (had|have|get|were|made)|i'd use|you'd use|at first|originally)\b( (?!so\b|now\b|and\b|but\b|today\b|i've\b)[\w',-]+){0,10}) ?$/;
 /** Amounts that come on top of what was said before. */
 export const ON_TOP = /\b(another|more|extra|remaining|the rest|second half|other half|again)\b/;

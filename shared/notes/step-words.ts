@@ -69,7 +69,7 @@ export const STEP_WORDS: readonly StepWord[] = [
   {
     action: 'cool',
     pattern:
-      /\b(let (it|that|this|them|them all|it all) (all )?cool|cool (it|them|right )?(down|completely)|leave (it|them) to cool|let it go cold|it can cool|chill (it|the|for)|put (it|the \w+|your \w+) in the freezer|ice bath)\b/,
+      /\b(let (it|that|this|them|them all|it all) (all )?cool|cool ((it|them|this|that)\b|(right )?(down|completely))|leave (it|them) to cool|let it go cold|it can cool|chill (it|the|for)|put (it|the \w+|your \w+) in the freezer|ice bath)\b/,
     operation: { kind: 'cool' },
     passive: true,
   },
@@ -82,7 +82,7 @@ export const STEP_WORDS: readonly StepWord[] = [
   {
     action: 'wait',
     pattern:
-      /\b(rest(s)? (it|for|covered|,)|then it rests|leave (it|them|that|this)( \w+)? (for|to (stand|sit|rest|infuse|settle)|overnight|a|in|somewhere|until)|leave \d|let (it|them|that|this) (sit|stand|rest|settle|infuse)|stand for|cover (it|and)|^\W*cover\b|put a lid|(into|in) the fridge|^\W*fridge|give it (a|an|\d+|\w+) (minute|minutes|hour|hours|day|days|week))\b/,
+      /\b(rest(s)? (it|for|covered|,)|then it rests|leave (it|them|that|this)( \w+)? (for|to (stand|sit|rest|infuse|settle)|overnight|a|in|somewhere|until)|leave \d|leave (for|to (stand|sit|rest|infuse)|until|overnight)|let (it|them|that|this) (sit|stand|rest|settle|infuse)|stand for|cover (it|and)|^\W*cover\b|put a lid|(into|in) the fridge|^\W*fridge|give it (a|an|\d+|\w+) (minute|minutes|hour|hours|day|days|week))\b/,
     operation: { kind: 'infuse' },
     passive: true,
   },
@@ -95,7 +95,7 @@ export const STEP_WORDS: readonly StepWord[] = [
   {
     action: 'add',
     pattern:
-      /\b(add(ing)?|pour( it| them| the| that| over| in)?|tip (it|them|the|in)|in goes|goes in|go in|\w+ in, |scrape in|fold in|put (it|them|the|in))\b/,
+      /\b(add(ing)?|pour( it| them| the| that| over| in)?|tip (it|them|the|in)|in goes|goes in|go in|\w+ in, |scrape in|fold in|put (it|them|the|in|everything))\b/,
     operation: { kind: 'add' },
   },
   { action: 'crack', pattern: /\b(crack (it|the|an|one|your)|separate)\b/, operation: null },

@@ -4,7 +4,7 @@ import type { Mention } from './mentions.ts';
 import type { Quantity } from './quantities.ts';
 import { OTHER_DRINK } from './said-as.ts';
 import { NOT_DONE, STEP_WORDS, type StepWord } from './step-words.ts';
-import { wordsBefore, type Transcript } from './tokens.ts';
+import { wordsBefore, wordsOf, type Transcript } from './tokens.ts';
 
 interface Act {
   clauses: Clause[];
@@ -42,15 +42,35 @@ export function readSteps(transcript: Transcript, given: Given): DraftStep[] {
 }
 
 function actsOf(transcript: Transcript, { kept, built, ingredients, places }: Given): Act[] {
-  const rows = new Set(built ? places.filter((_, index) => !ingredients[index]!.optional).map(([first]) => first) : []);
-  const starts = [...rows].map((mention) => mention!.from).sort((a, b) => a - b);
-  return clausesOf(transcript).flatMap((clause) => {
-    if (OTHER_DRINK.test(`${clause.words} `)) return [];
-    const found = stepWordIn(clause.words);
-    const tellsKeeping = found?.passive && kept.some(({ from }) => from >= clause.from && from < clause.to);
-    const poured = starts.some((from) => from >= clause.from && from < clause.to);
-    const word = (tellsKeeping ? null : found) ?? (poured ? POURED_IN : null);
-    return word ? [{ clauses: [clause], word, duration: null, temperature: null }] : [];
+  const { tokens } = transcript;
+  const rows = built ? places.filter((_, index) => !ingredients[index]!.optional) : [];
+  const starts = rows.flatMap((mentions) => mentions.find(({ from }) => tokens[from]!.cue > 0)?.from ?? []);
+  return clausesOf(transcript)
+    .flatMap((whole) => partsOf(transcript, whole))
+    .flatMap((clause) => {
+      if (OTHER_DRINK.test(`${clause.words} `)) return [];
+      const found = stepWordIn(clause.words);
+      const tellsKeeping = found?.passive && kept.some(({ from }) => from >= clause.from && from < clause.to);
+      const poured = starts.some((from) => from >= clause.from && from < clause.to);
+      const word = (tellsKeeping ? null : found) ?? (poured ? POURED_IN : null);
+      return word ? [{ clauses: [clause], word, duration: null, temperature: null }] : [];
+    });
+}
+
+const JOINS = new Set(['and', 'then', 'minute', 'minutes', 'hour', 'hours', 'second', 'seconds']);
+
+/** In running speech one thing follows the other: "simmer it for ten minutes cool it and strain it". */
+function partsOf({ tokens, typed }: Transcript, clause: Clause): Clause[] {
+  if (typed) return [clause];
+  const starts = [clause.from];
+  for (let index = clause.from + 3; index < clause.to - 1; index += 1) {
+    if (!JOINS.has(tokens[index - 1]!.word) || index - starts.at(-1)! < 3) continue;
+    const words = wordsOf(tokens.slice(index, Math.min(clause.to, index + 6)));
+    if (STEP_WORDS.some(({ pattern }) => words.search(pattern) === 0)) starts.push(index);
+  }
+  return starts.map((from, index) => {
+    const to = starts[index + 1] ?? clause.to;
+    return { from, to, words: wordsOf(tokens.slice(from, to)) };
   });
 }
 
@@ -119,7 +139,7 @@ function together(acts: readonly Act[]): Act[] {
 function isSame(before: Act, act: Act): boolean {
   if (act.clauses[0]!.from - before.clauses.at(-1)!.to > TOGETHER) return false;
   if (act.duration && before.duration && !sameTime(act.duration, before.duration)) return false;
-  if (before.word.action === act.word.action) return true;
+  if (before.word.action === act.word.action) return act.word !== POURED_IN;
   const passive = before.word.passive && act.word.passive;
   return passive === true && (before.duration === null || act.duration === null);
 }
@@ -162,7 +182,7 @@ function sentence(text: string): string {
   const trimmed =
     text
       .replace(FILLERS, '')
-      .replace(/[,;\s-]+$/, '')
+      .replace(/([,;\s-]|\s(and|then|so|or|but|with|the|a))+$/i, '')
       .trim() || text.trim();
   const first = trimmed.charAt(0).toUpperCase() + trimmed.slice(1);
   return /[.!?]$/.test(first) ? first : `${first}.`;

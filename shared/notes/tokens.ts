@@ -75,9 +75,14 @@ export function wordsAfter(tokens: readonly Token[], index: number, most: number
   return wordsOf(tokens.slice(index, to));
 }
 
+/** Words joined by single spaces, hyphens without. */
 export function wordsOf(tokens: readonly Token[]): string {
-  return tokens
-    .map(({ word }) => word)
-    .join(' ')
-    .replace(/ - /g, '-');
+  let words = '';
+  let joined = true;
+  for (const { word } of tokens) {
+    const hyphen = word === '-';
+    words += joined || hyphen ? word : ` ${word}`;
+    joined = hyphen;
+  }
+  return words;
 }

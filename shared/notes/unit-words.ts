@@ -61,5 +61,6 @@ export const TIME_WORDS: Readonly<Record<string, number>> = {
   ...Object.fromEntries(['day', 'days'].map((word) => [word, 86_400])),
   ...Object.fromEntries(['week', 'weeks', 'wk', 'wks'].map((word) => [word, 604_800])),
   // A month of keeping is taken as thirty days.
+  ...Object.fromEntries(['year', 'years'].map((word) => [word, 31_536_000])),
   ...Object.fromEntries(['month', 'months'].map((word) => [word, 2_592_000])),
 };

@@ -63,7 +63,9 @@ export function makeVocabulary(larder: LarderNames): Vocabulary {
 /** A name that tells its strength or its ratio ("vodka, 50 %") is not what somebody says. */
 function namesOf({ name, otherNames }: LarderNames[number]): string[] {
   const kind = SUGAR.exec(name)?.[1];
-  return [name, ...otherNames, ...(kind ? [kind] : [])].filter((each) => !/[\d,]/.test(each));
+  return [name, ...otherNames, ...(kind ? [kind] : [])]
+    .filter((each) => !/\d/.test(each))
+    .map((each) => each.replace(/,.*/, ''));
 }
 
 const keyOf = (words: readonly string[]) => [...words].sort().join(' ');
