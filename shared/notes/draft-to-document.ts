@@ -5,9 +5,10 @@ import {
   type NoteSource,
   type RecipeDocument,
 } from '../contracts/recipe-document.ts';
+import { toolsIn } from './equipment.ts';
 
 /** The most that a recipe document holds; notes of a whole day may say more. */
-const MOST = { lines: 2000, steps: 200, uses: 200, name: 160, prep: 200, text: 4000 };
+const MOST = { lines: 2000, steps: 200, uses: 200, name: 160, prep: 200, text: 4000, servings: 10_000, tools: 20 };
 
 /**
  * A draft as a recipe document: every line and step keeps its cue and its second of video. What goes beyond a document's
@@ -15,10 +16,15 @@ const MOST = { lines: 2000, steps: 200, uses: 200, name: 160, prep: 200, text: 4
  */
 export function draftToDocument(draft: Draft, { title, kind }: Pick<RecipeDocument, 'title' | 'kind'>): RecipeDocument {
   const blank = emptyRecipeDocument(title, kind);
-  const [stated] = draft.yields;
+  const stated = draft.yields.findLast(({ unit }) => unit !== 'drink');
+  const drinks = draft.yields.find(({ unit }) => unit === 'drink')?.amount.max ?? null;
   return {
     ...blank,
-    yield: { ...blank.yield, stated: stated ? { amount: stated.amount, unit: stated.unit } : null },
+    yield: {
+      ...blank.yield,
+      stated: stated ? { amount: stated.amount, unit: stated.unit } : null,
+      servings: drinks !== null && drinks > 0 && drinks <= MOST.servings ? drinks : null,
+    },
     sections: [{ id: 's1', title: '', lines: draft.ingredients.slice(0, MOST.lines).map(toLine) }],
     steps: draft.steps.slice(0, MOST.steps).map(toStep),
     keeping: toKeeping(draft.storage),
@@ -53,7 +59,7 @@ function toStep(step: DraftStep, index: number): RecipeDocument['steps'][number]
     duration: step.durationSec,
     attention: step.passive ? 'waiting' : 'hands-on',
     temperature: step.temperatureC,
-    tools: [],
+    tools: toolsIn(step.text).slice(0, MOST.tools),
     plateId: null,
     after: null,
     source: sourceOf(step),

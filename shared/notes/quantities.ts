@@ -36,6 +36,7 @@ export function readQuantities(tokens: readonly Token[]): Quantity[] {
 /** A recipe can only hold a finite number and a temperature that a bar can reach: "5000 degrees" is a slip. */
 function isPossible({ kind, value: { min, max } }: Quantity): boolean {
   if (!Number.isFinite(min) || !Number.isFinite(max)) return false;
+  if (kind !== 'temperature' && max === 0) return false;
   return kind !== 'temperature' || (min >= -200 && max <= 300);
 }
 

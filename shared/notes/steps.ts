@@ -118,7 +118,7 @@ function repeats(acts: readonly Act[], index: number, quantity: Quantity): boole
 /** "at eight hours", "the other four minutes": a moment or a rest, no time to plan with. */
 function isPassing(before: string, { kind }: Quantity): boolean {
   if (kind === 'temperature') return /\b(not|isn't|never) (a |at )?$/.test(`${before} `);
-  return /\b(at|other|after|half past|costs?|every|in the last|within|took|isn't|not going to( \w+){0,3}|another video)( about)?$/.test(
+  return /\b(at|other|after|half past|costs?|every|in the last|within|took|isn't|not going to( \w+){0,3})( about)?$/.test(
     before,
   );
 }
