@@ -20,5 +20,4 @@ export const serverUnready = defineError('server.unready', 503, 'The house is no
 export const serverFailed = defineError('server.failed', 500, 'Something broke on our side. It has been written down.');
 export const signInFirst = defineError('access.sign_in', 401, 'Sign in first.');
 export const roleMissing = defineError('access.role', 403, 'Your part in the house does not include this.');
-export const verifyFirst = defineError('access.verify_email', 403, 'Confirm your e-mail address first.');
 export const ageUnconfirmed = defineError('age.unconfirmed', 403, 'Say that you are old enough first.');

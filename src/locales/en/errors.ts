@@ -30,7 +30,6 @@ export const errors = {
   access: {
     sign_in: 'Sign in to go on.',
     role: 'This is for others in the house.',
-    verify_email: 'Confirm your e-mail address first; the letter with the link was sent to you.',
   },
   age: {
     unconfirmed: 'Answer the age check first.',
@@ -100,7 +99,6 @@ export const errors = {
   tiers: {
     not_found: 'There is no such tier.',
     rank_taken: 'Another tier already has this rank.',
-    in_use: 'Members hold this tier. Close it to new members instead.',
   },
   checkout: {
     not_verified: 'Confirm your e-mail address before you join.',
