@@ -31,7 +31,7 @@ export const reading = {
     less: 'rounded, {percent} % less than exact',
   },
   service: {
-    method: 'Way',
+    method: 'Made',
     glass: 'Glass',
     ice: 'Ice',
     garnish: 'Garnish',
