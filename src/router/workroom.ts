@@ -61,4 +61,26 @@ export const workroomRoutes: RouteRecordRaw[] = [
       },
     ],
   },
+  {
+    // A galley is read where the book will be read, by those who make it.
+    path: '/workroom/bindery/:id/galley',
+    component: () => import('@/layouts/ReadingLayout.vue'),
+    meta: { access: 'staff', area: 'workroom' },
+    children: [
+      {
+        path: '',
+        name: 'galley',
+        component: () => import('@/pages/workroom/GalleyPage.vue'),
+        props: true,
+        meta: { title: 'workroom.title.galley' },
+      },
+      {
+        path: ':recipe',
+        name: 'galley-recipe',
+        component: () => import('@/pages/workroom/GalleyRecipePage.vue'),
+        props: true,
+        meta: { title: 'workroom.title.galleyRecipe' },
+      },
+    ],
+  },
 ];

@@ -8,5 +8,7 @@ export const workroom = {
     bindery: 'Bindery',
     binding: 'Book at work',
     larder: 'Larder',
+    galley: 'Galley',
+    galleyRecipe: 'Recipe in the galley',
   },
 };

@@ -1,0 +1,11 @@
+import { bindery } from './bindery.ts';
+import { drafts } from './drafts.ts';
+import { editor } from './editor.ts';
+import { larder } from './larder.ts';
+import { margin } from './margin.ts';
+import { plates } from './plates.ts';
+import { recipes } from './recipes.ts';
+import { workroom } from './workroom.ts';
+
+/** Everything the workroom says, one file for each of its rooms. */
+export const workroomArea = { ...workroom, bindery, drafts, editor, larder, margin, plates, recipes };
