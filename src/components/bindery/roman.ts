@@ -18,7 +18,6 @@ const SIGNS = [
 export function toRoman(value: number): string {
   let rest = value;
   let text = '';
-  for (const [worth, sign] of SIGNS)
-    for (; rest >= worth; rest -= worth) text += sign;
+  for (const [worth, sign] of SIGNS) for (; rest >= worth; rest -= worth) text += sign;
   return text;
 }

@@ -41,6 +41,7 @@ export const bindery = {
     note: 'A galley of working copies, for the house only. Readers see what was released last.',
     open: 'Galley',
     back: 'To the bindery',
+    of: 'Galley: {title}',
   },
 
   chapter: {
