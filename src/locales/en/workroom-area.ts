@@ -5,7 +5,8 @@ import { larder } from './larder.ts';
 import { margin } from './margin.ts';
 import { plates } from './plates.ts';
 import { recipes } from './recipes.ts';
+import { shoots } from './shoots.ts';
 import { workroom } from './workroom.ts';
 
 /** Everything the workroom says, one file for each of its rooms. */
-export const workroomArea = { ...workroom, bindery, drafts, editor, larder, margin, plates, recipes };
+export const workroomArea = { ...workroom, bindery, drafts, editor, larder, margin, plates, recipes, shoots };
