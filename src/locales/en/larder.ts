@@ -18,8 +18,8 @@ export const larder = {
   notKnown: 'not known',
   noAllergen: 'none listed',
   also: 'also {names}',
-  sources: 'Sources',
-  sourcesOf: 'Sources of {name}',
+  sources: 'Numbers and their sources',
+  more: 'Show {n} more',
   noNumbers: 'No number is known for it.',
   figure: {
     strength: 'Strength, {n} % vol',
@@ -28,12 +28,6 @@ export const larder = {
     acid: 'Acid, {n} g in 100 ml',
     water: 'Water, {n} g in 100 g',
     pieceWeight: 'One piece, {n} g',
-  },
-  source: {
-    common: 'common practice',
-    estimate: 'estimate of the house',
-    usda: 'USDA National Nutrient Database, release 28, entry {entry}',
-    oiml: 'OIML R 22 (international alcoholometric tables) {rest}',
   },
   natures: {
     spirit: 'Spirit',

@@ -7,13 +7,13 @@ export const plates = {
   onlyWithout: 'No alt text yet',
   none: 'No plate yet',
   noneText: 'Bring photographs from the shoot: many at once, as large as they are.',
+  more: 'Show {n} more',
   noneWithout: 'Every plate has its alt text',
   noneWithoutText: 'Nothing is left to write here.',
 
   drop: {
     title: 'Bring pictures',
     text: 'Drop them here, or choose files. JPEG, PNG, WebP, AVIF or TIFF, up to 60 MB and 100 megapixels each.',
-    choose: 'Choose files',
     progress: '{n} of {all} brought in',
   },
 
@@ -27,7 +27,6 @@ export const plates = {
     summary: '{kept} kept, {refused} refused',
     again: 'Send again what did not arrive',
     clear: 'Put this list away',
-    stillSending: 'Pictures are still on their way in.',
   },
 
   state: {
@@ -35,12 +34,10 @@ export const plates = {
     ready: 'Ready',
     failed: 'Could not be prepared. Take it away and bring the picture again.',
   } satisfies Record<PlateView['state'], string>,
-  notReady: 'Not prepared yet',
   pixels: '{width} × {height} px',
 
   words: {
     edit: 'Edit words',
-    editName: 'Edit the words of {name}',
     noAlt: 'No alt text yet',
     title: 'Words of the plate',
     alt: 'Alt text',
@@ -54,7 +51,6 @@ export const plates = {
 
   remove: {
     action: 'Take away',
-    name: 'Take away {name}',
     ask: 'Take away this plate?',
     text: '{name} goes from the house. Released editions keep their own copy.',
     keep: 'Keep it',
@@ -62,7 +58,6 @@ export const plates = {
   },
 
   pick: {
-    none: 'None',
     choose: 'Choose {name}',
     empty: 'There is no plate that is ready.',
   },
