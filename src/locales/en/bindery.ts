@@ -137,6 +137,14 @@ export const bindery = {
     uncleared: 'An edition holds cleared recipes only. Not cleared yet:',
   },
 
+  waiting: {
+    title: 'Not cleared yet',
+    text: 'One recipe keeps the book from the press. | One recipe keeps the book from the press. | {n} recipes keep the book from the press.',
+    lacks: 'Lacks {names}.',
+    whole: 'Nothing missing; to be cleared.',
+    more: 'Show {n} more',
+  },
+
   editions: {
     title: 'Editions',
     none: 'Not pressed yet. When every recipe is cleared, press the first edition; the creator issues it.',
