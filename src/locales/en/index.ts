@@ -1,12 +1,13 @@
 import { account } from './account.ts';
 import { common } from './common.ts';
+import { drafts } from './drafts.ts';
 import { errors } from './errors.ts';
 import { front } from './front.ts';
 import { reading } from './reading.ts';
 import { words } from './words.ts';
 
 /** What every page may need. The staff areas bring their own catalogues with them. */
-export const en = { account, common, errors, front, reading, words };
+export const en = { account, common, drafts, errors, front, reading, words };
 
 /** Catalogues that are fetched on entering their area, so that a reader does not carry them. */
 export const areas = {

@@ -7,13 +7,14 @@ export const office = {
     imprint: 'Imprint',
   },
 
+  pages: { label: 'Pages', before: 'Newer', after: 'Older', at: 'Page {page} of {pages}' },
+
   people: {
     lede: '{n} person in this house | {n} people in this house',
     found: '{n} found | {n} found',
     find: 'Name or e-mail',
     role: 'Role',
     anyRole: 'Any role',
-    search: 'Find',
     caption: 'People of the house, newest first',
     name: 'Name',
     email: 'E-mail',
@@ -40,8 +41,6 @@ export const office = {
     admin: 'All of that, and tiers, people and the imprint.',
     save: 'Save the roles',
     saved: 'The roles of {name} are saved.',
-    reload: 'Load this person anew',
-    reloaded: 'Somebody else changed this person. Their roles now: {roles}. Yours are still marked above.',
   },
 
   tiers: {
@@ -112,17 +111,5 @@ export const office = {
     privacy: 'Privacy notes',
     markdown: 'Markdown.',
     save: 'Save the settings',
-  },
-
-  conflict: {
-    title: 'Somebody else saved in the meantime',
-    text: 'Your text is still here and nothing of theirs is overwritten yet. Look at what differs: take theirs where it is right, then save.',
-    same: 'What they saved is the same as yours here. Save again.',
-    field: 'Field',
-    theirs: 'Saved by somebody else',
-    mine: 'Here on this page',
-    take: 'Take theirs',
-    takeOf: 'Take theirs for {field}',
-    empty: 'empty',
   },
 };

@@ -1,5 +1,4 @@
 import { bindery } from './bindery.ts';
-import { drafts } from './drafts.ts';
 import { editor } from './editor.ts';
 import { larder } from './larder.ts';
 import { margin } from './margin.ts';
@@ -9,4 +8,4 @@ import { shoots } from './shoots.ts';
 import { workroom } from './workroom.ts';
 
 /** Everything the workroom says, one file for each of its rooms. */
-export const workroomArea = { ...workroom, bindery, drafts, editor, larder, margin, plates, recipes, shoots };
+export const workroomArea = { ...workroom, bindery, editor, larder, margin, plates, recipes, shoots };
