@@ -3,7 +3,6 @@ import { z } from 'zod';
 /** A path segment: lower case letters, digits and single hyphens. */
 export const slug = z
   .string()
-  .min(1)
   .max(120)
   .regex(/^[a-z0-9]+(?:-[a-z0-9]+)*$/, 'Use lower case letters, digits and hyphens.');
 
