@@ -18,12 +18,15 @@ export interface AppContext {
   now: () => Date;
 }
 
+/** A demonstration runs in somebody's terminal, where its address must stay in sight. */
+const LOG_LEVELS: Readonly<Record<Settings['mode'], string>> = { live: 'info', demo: 'warn', test: 'silent' };
+
 /** Makes the context; `close` gives everything back. */
 export function makeContext(settings: Settings, overrides: Partial<AppContext> = {}): AppContext {
   return {
     settings,
     db: overrides.db ?? openDatabase(settings.database.url),
-    log: overrides.log ?? pino({ level: settings.mode === 'test' ? 'silent' : 'info' }, pino.destination(2)),
+    log: overrides.log ?? pino({ level: LOG_LEVELS[settings.mode] }, pino.destination(2)),
     files: overrides.files ?? openFileStore(settings.dataDir),
     stripe: overrides.stripe ?? openStripe(settings.stripe),
     mail: overrides.mail ?? openMailer(settings.mail),
