@@ -31,7 +31,6 @@ export const bindery = {
     slugHint: 'Its pages stand at /books/{slug}. Readers’ links break when it changes.',
     cover: 'Cover plate',
     noCover: 'No cover plate',
-    coverHint: 'Plates come from the plates page.',
     saved: 'The book is saved.',
     cleared: '{n} of {all} recipes cleared',
   },
@@ -85,11 +84,12 @@ export const bindery = {
 
   order: {
     label: 'Running order',
-    state: 'State',
     drag: 'Drag {title}',
     up: 'Move {title} up',
     down: 'Move {title} down',
     moved: '{title}: place {n} in {chapter}.',
+    overtaken:
+      'Somebody else changed this book in the meantime. This is its order as it stands now; your last move is not in it.',
     chapterMoved: 'Chapter {title}: place {n}.',
     edit: 'Access and place of {title}',
     complete: '{n} of {all}',
