@@ -19,7 +19,7 @@ export interface AppContext {
 }
 
 /** A demonstration runs in somebody's terminal, where its address must stay in sight. */
-const LOG_LEVELS: Readonly<Record<Settings['mode'], string>> = { live: 'info', demo: 'warn', test: 'silent' };
+const LOG_LEVELS: Readonly<Record<Settings['mode'], string>> = { production: 'info', demo: 'warn', test: 'silent' };
 
 /** Makes the context; `close` gives everything back. */
 export function makeContext(settings: Settings, overrides: Partial<AppContext> = {}): AppContext {
