@@ -55,7 +55,7 @@ export const account = {
     none: 'Nothing has been paid yet.',
     number: 'Receipt',
     paidAt: 'Paid on',
-    tier: 'For',
+    for: 'for {tier}',
     amount: 'Amount',
     openOf: 'Open receipt {number}',
   },
