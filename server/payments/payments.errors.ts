@@ -18,7 +18,7 @@ export const checkoutNotVerified = defineError(
 export const checkoutAlreadyMember = defineError(
   'checkout.already_member',
   409,
-  'You hold a membership already. Change it on your account page.',
+  'You hold a membership already. Let it end on your account page, then join another tier.',
 );
 export const checkoutTierClosed = defineError('checkout.tier_closed', 409, 'This tier takes no new members.');
 export const checkoutTierWaiting = defineError(

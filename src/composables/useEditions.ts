@@ -23,12 +23,16 @@ export function useEditions(bookId: () => string, onIssue: () => void) {
   const pressing = computed(() => editions.value?.find((row) => row.state === 'pressing'));
 
   const { pause, resume } = useIntervalFn(() => refetch(), EVERY_MS, { immediate: false });
-  watch(pressing, (now, before) => {
-    if (now) resume();
-    else pause();
-    const ended = before && !now ? editions.value?.find((row) => row.id === before.id) : undefined;
-    if (ended) announceEnd(ended);
-  }, { immediate: true });
+  watch(
+    pressing,
+    (now, before) => {
+      if (now) resume();
+      else pause();
+      const ended = before && !now ? editions.value?.find((row) => row.id === before.id) : undefined;
+      if (ended) announceEnd(ended);
+    },
+    { immediate: true },
+  );
 
   function announceEnd({ state, number }: EditionRow): void {
     if (state === 'failed') announce(t('workroom.bindery.press.failed', { n: number }), 'attention');

@@ -26,7 +26,7 @@ export function useFrontDoor() {
   const leading = useQuery({
     key: () => ['reading', slug.value, lead.value, 'self', reader.value],
     query: () => fetchReading(slug.value, lead.value),
-    enabled: () => lead.value !== '',
+    enabled: () => session.ageConfirmed && lead.value !== '',
   });
 
   return {

@@ -70,7 +70,7 @@ export function useRunningOrder({ book, save, reload }: Options) {
     if (saving) return;
     error.value = null;
     try {
-      for (let held = book(); held && !isSame(chapters.value, held.chapters); ) {
+      for (let held = book(); held && !isSame(chapters.value, held.chapters);) {
         saving = true;
         state.value = 'saving';
         held = await save(toOrder(chapters.value), held.version);

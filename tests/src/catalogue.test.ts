@@ -1,12 +1,10 @@
-import { readdirSync, readFileSync } from 'node:fs';
-import { join } from 'node:path';
 import { describe, expect, it } from 'vitest';
 import { en } from '../../src/locales/en/index.ts';
 import { office } from '../../src/locales/en/office.ts';
 import { workroomArea } from '../../src/locales/en/workroom-area.ts';
 
 const catalogue = { ...en, office, workroom: workroomArea };
-const SOURCES = join(import.meta.dirname, '../../src');
+const SOURCES = import.meta.glob<string>('../../src/**/*.{vue,ts}', { query: '?raw', import: 'default', eager: true });
 
 /** Every key that a source names in full, and the beginning of every key that is put together. */
 function keysOf(text: string): { whole: string[]; begun: string[] } {
@@ -19,8 +17,7 @@ function find(key: string): unknown {
   return key.split('.').reduce<unknown>((at, name) => (at as Record<string, unknown> | undefined)?.[name], catalogue);
 }
 
-const files = readdirSync(SOURCES, { recursive: true, encoding: 'utf8' }).filter((file) => /\.(vue|ts)$/.test(file));
-const read = files.map((file) => ({ file, ...keysOf(readFileSync(join(SOURCES, file), 'utf8')) }));
+const read = Object.entries(SOURCES).map(([file, text]) => ({ file, ...keysOf(text) }));
 
 describe('the catalogue of strings', () => {
   it('holds every sentence that a source asks for by its key', () => {

@@ -102,7 +102,7 @@ export const errors = {
   },
   checkout: {
     not_verified: 'Confirm your e-mail address before you join.',
-    already_member: 'You hold a membership already. Change it on your account page.',
+    already_member: 'You hold a membership already. Let it end on your account page, then join another tier.',
     tier_closed: 'This tier takes no new members.',
     tier_waiting: 'This tier is just being changed. Try again in a moment.',
   },

@@ -95,7 +95,8 @@ export const front = {
     resend: 'Send the letter again',
     resent: 'A new letter is on its way to {email}.',
     letters: 'Look at the letters of this demonstration',
-    member: 'You are a member already: {tier} is open to you. Change or end it on your account page.',
+    member:
+      'You are a member already: {tier} is open to you. To change, let it end on your account page and join anew.',
     toAccount: 'To your account',
     staff: 'You work here: every recipe is open to you without a tier.',
     fine: 'Your tier opens as soon as it is paid. You can end it whenever you like, and read on to the end of what you paid for.',
