@@ -23,7 +23,16 @@ describe('the moments from which each tier may read', () => {
   });
 
   it('names nobody when no moment is entered', () => {
-    expect(toMoments([{ rank: 0, wall: '' }, { rank: 1, wall: '' }], ZONE, NOW)).toEqual({ moments: [], faults: {} });
+    expect(
+      toMoments(
+        [
+          { rank: 0, wall: '' },
+          { rank: 1, wall: '' },
+        ],
+        ZONE,
+        NOW,
+      ),
+    ).toEqual({ moments: [], faults: {} });
   });
 
   it('refuses a higher tier that would open after a lower one', () => {
