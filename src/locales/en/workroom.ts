@@ -8,6 +8,8 @@ export const workroom = {
     bindery: 'Bindery',
     binding: 'Book at work',
     larder: 'Larder',
+    atWork: 'At work: {title}',
+    shootOf: 'Shoot: {title}',
     galley: 'Galley',
     galleyRecipe: 'Recipe in the galley',
   },
