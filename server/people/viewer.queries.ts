@@ -18,7 +18,7 @@ export interface ViewerRow {
   grace_days: number;
 }
 
-/** Everything about a person that decides what they may do, in one indexed query. */
+/** Everything about a person that decides what they may do, in one indexed query, prepared by name: every request asks it. */
 export async function findViewerRow(db: Knex, personId: string): Promise<ViewerRow | undefined> {
   return db('people')
     .crossJoin('imprint' as never)
@@ -39,5 +39,6 @@ export async function findViewerRow(db: Knex, personId: string): Promise<ViewerR
       'tiers.rank',
       'tiers.name as tier_name',
       'imprint.grace_days',
-    );
+    )
+    .options({ name: 'find-viewer' });
 }

@@ -62,17 +62,14 @@ export async function readGalleyRecipe(
   viewer: GateViewer,
 ): Promise<z.input<typeof readingView>> {
   const { snapshot, recipes } = await takeGalley(ctx, bookId);
-  const index = recipes.findIndex((row) => row.slug === slug);
-  const row = recipes[index];
+  const row = recipes.find((bound) => bound.slug === slug);
   if (!row) throw notThere();
   const book = { slug: snapshot.book.slug, title: snapshot.book.title };
   const decision = decideRow(gated(row), viewer, ctx.now());
   if (decision.open) {
-    const around = { previous: neighbour(recipes[index - 1]), next: neighbour(recipes[index + 1]) };
     const read = {
       ...row,
       ...gated(row),
-      ...around,
       edition_kind: 'galley',
       edition_number: 0,
       book_title: book.title,
@@ -87,8 +84,4 @@ export async function readGalleyRecipe(
 /** A galley has no dates, and a withdrawn recipe stands in it so that it can be seen and taken out. */
 function gated({ access }: Pick<BoundRecipeRow, 'access'>) {
   return { access, opens: [], withdrawn: false };
-}
-
-function neighbour(row: BoundRecipeRow | undefined) {
-  return row ? { slug: row.slug, title: row.title } : null;
 }

@@ -51,8 +51,6 @@ export function toOpenView(
     keeping: document.keeping,
     figures,
     components,
-    previous: row.previous,
-    next: row.next,
   };
 }
 

@@ -44,8 +44,6 @@ const readStep = recipeStep
   .omit({ source: true, text: true, plateId: true })
   .strip()
   .extend({ html: z.string(), plate: picture.nullable() });
-const neighbour = z.object({ slug, title: z.string() }).nullable();
-
 /** A recipe to a reader: whole, or closed behind its teaser. */
 export const readingView = z.discriminatedUnion('view', [
   z.object({
@@ -65,8 +63,6 @@ export const readingView = z.discriminatedUnion('view', [
     keeping: keeping.nullable(),
     figures,
     components: z.record(z.string(), z.object({ slug, title: z.string() })),
-    previous: neighbour,
-    next: neighbour,
   }),
   z.object({
     view: z.literal('teaser'),
