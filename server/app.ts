@@ -35,6 +35,8 @@ export function makeApp(ctx: AppContext): App {
   app.locals.signIn = signIn;
   app.locals.routes = allRoutes;
   app.disable('x-powered-by');
+  // Answers are never stored; what two people edit carries its version as its tag.
+  app.set('etag', false);
   app.set('trust proxy', ctx.settings.secureCookies ? 1 : false);
 
   app.use(pinoHttp({ logger: ctx.log, serializers: quietSerializers, autoLogging: { ignore: isQuiet } }));
