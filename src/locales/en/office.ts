@@ -7,6 +7,15 @@ export const office = {
     imprint: 'Imprint',
   },
 
+  typed: {
+    missing: 'This must not be empty.',
+    whole: 'Write a whole number.',
+    tooLittle: 'At least {min}.',
+    tooMuch: 'At most {max}.',
+    money: 'Write an amount like 4 or 4.50.',
+    least: 'The least that can be charged is {least}.',
+  },
+
   pages: { label: 'Pages', before: 'Newer', after: 'Older', at: 'Page {page} of {pages}' },
 
   people: {
@@ -104,12 +113,14 @@ export const office = {
     zone: 'Time zone',
     zoneHint: 'Dates are written and memberships counted in it.',
     ageLimit: 'Age limit, years',
-    ageHint: 'Nobody younger reads about a drink.',
+    ageLimitHint: 'Nobody younger reads about a drink.',
     graceDays: 'Days of grace',
-    graceHint: 'How long a tier stays open after a payment failed.',
+    graceDaysHint: 'How long a tier stays open after a payment failed.',
     terms: 'Terms',
     privacy: 'Privacy notes',
-    markdown: 'Markdown.',
+    markdown: 'Markdown: a blank line between paragraphs, ## before a heading, **bold**, - before a list entry.',
+    termsAsRead: 'The saved terms as people read them',
+    privacyAsRead: 'The saved privacy notes as people read them',
     save: 'Save the settings',
   },
 };
