@@ -14,6 +14,9 @@ export const office = {
     tooMuch: 'At most {max}.',
     money: 'Write an amount like 4 or 4.50.',
     least: 'The least that can be charged is {least}.',
+    tooLong: 'At most {most} characters.',
+    tooMany: 'At most {most} lines.',
+    longLine: 'At most {most} characters a line; the one that begins “{start}” is longer.',
   },
 
   pages: { label: 'Pages', before: 'Newer', after: 'Older', at: 'Page {page} of {pages}' },
@@ -99,10 +102,9 @@ export const office = {
     yearly: 'Price by the year, {currency}',
     moneyHint: 'Like 4 or 4.50.',
     keepPrice: 'Members who hold the tier keep the price they joined at.',
+    repriced:
+      'The new price is for those who join from now on; nobody holds the tier yet. | The new price is for those who join from now on. {n} member keeps the price they joined at. | The new price is for those who join from now on. {n} members keep the price they joined at.',
     save: 'Save the tier',
-    missing: 'This must not be empty.',
-    whole: 'Write a whole number.',
-    minor: 'At most two digits after the point.',
   },
 
   imprint: {
