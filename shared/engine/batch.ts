@@ -1,5 +1,5 @@
 import type { Figure, Lack } from '../contracts/figures.ts';
-import type { RecipeDocument } from '../contracts/recipe-document.ts';
+import type { RecipeDocument, RecipeStep } from '../contracts/recipe-document.ts';
 import { tradeMeasuresOf, type EngineContext } from './context.ts';
 import { known, unknown } from './figure.ts';
 import { massOf, shareOf, strengthOf, sugarOf, volumeOf, type Matter } from './matter.ts';
@@ -59,7 +59,8 @@ function makeBatch(
 ): Batch {
   const trade = tradeMeasuresOf(context);
   const measured = yieldBySay({ ...document.yield, stated: null, servings: null }, null, trade);
-  const filled = measured && losesVolume(document) ? beforeStraining(document, measured.max) : null;
+  const followed = losesVolume(document) && strainSteps(document).every(lossIsKnown);
+  const filled = measured && followed ? measured.max : null;
   const mixture = mix(document, context, compositionOf, filled);
   const rests =
     filled === null
@@ -102,29 +103,29 @@ function lacksFor(document: RecipeDocument, mixture: Mixture, beside: Lack['code
 function strained(document: RecipeDocument, mixture: Mixture, figure: Figure): Figure {
   if (!figure.known) return figure;
   if (!mixture.sized) return unknown([{ code: 'yield-missing', subject: document.title }]);
-  const kept = keptInStraining(document);
-  if (kept === null) return unknown(strainSteps(document).filter(isUnmeasured).map(lossUnknown));
-  return kept === 1 ? figure : known(figure.min * kept, figure.max * kept, 'estimated', figure.rests);
+  const unmeasured = strainSteps(document).filter((step) => !lossIsKnown(step));
+  return unmeasured.length > 0 ? unknown(unmeasured.map(lossUnknown)) : figure;
 }
 
-const strainSteps = (document: RecipeDocument) => document.steps.filter((step) => step.operation?.kind === 'strain');
-const isUnmeasured = (step: RecipeDocument['steps'][number]) => lossShareOf(step) === null;
-const lossShareOf = ({ operation }: RecipeDocument['steps'][number]) =>
-  operation?.kind === 'strain' ? operation.lossShare : null;
-
-/** Share left after every straining, or null where one states no loss. A drink leaves next to nothing in the strainer. */
-function keptInStraining(document: RecipeDocument): number | null {
-  const losses = strainSteps(document).map((step) => lossShareOf(step) ?? (document.kind === 'drink' ? 0 : null));
-  return losses.reduce<number | null>((kept, loss) => (kept === null || loss === null ? null : kept * (1 - loss)), 1);
+/** The strainings that take something: a drink leaves next to nothing in the strainer, unless it says how much. */
+function strainSteps({ kind, steps }: RecipeDocument): RecipeStep[] {
+  return steps.filter(
+    ({ operation }) => operation?.kind === 'strain' && (kind !== 'drink' || operation.lossShare !== null),
+  );
 }
 
-function beforeStraining(document: RecipeDocument, measured: number): number | null {
-  const kept = keptInStraining(document);
-  return kept === null || kept === 0 ? null : measured / kept;
+/** Where nothing runs through, nothing can be followed. */
+function lossIsKnown({ operation }: RecipeStep): boolean {
+  return operation?.kind === 'strain' && operation.lossShare !== null && operation.lossShare < 1;
 }
 
+/** What a measured yield tells more of than the lines: water that boiled away, ice that melted, what was reduced. */
 function losesVolume(document: RecipeDocument): boolean {
-  return stagesOf(document).length > 0 || document.steps.some((step) => heatingOf(step) !== null);
+  return changesWater(document) || document.steps.some((step) => heatingOf(step) !== null);
+}
+
+function changesWater(document: RecipeDocument): boolean {
+  return stagesOf(document).some(({ step }) => step.operation?.kind !== 'strain');
 }
 
 function densityOf(mixture: Mixture): number | null {
@@ -135,7 +136,7 @@ function densityOf(mixture: Mixture): number | null {
 /** Built over ice, a drink is as strong as stated only until the ice melts. */
 function iceToCome(document: RecipeDocument): string[] {
   const iced = document.ice !== '' && !/^(?:none|no)\b/i.test(document.ice);
-  return document.kind === 'drink' && iced && stagesOf(document).length === 0 ? [rest('before-ice')] : [];
+  return document.kind === 'drink' && iced && !changesWater(document) ? [rest('before-ice')] : [];
 }
 
 /** Kinds of recipe that another one uses as a thing, not as a liquid. */

@@ -9,8 +9,20 @@ import { cautionsOfLines } from './line-cautions.ts';
 import { cautionsOfText } from './text-cautions.ts';
 
 /**
+ * What can harm whoever makes a thing and not whoever pours it: these stay with the recipe that is made that way. Ours; all
+ * others go into everything that the thing goes into.
+ */
+const OF_MAKING: ReadonlySet<Caution> = new Set([
+  'spirit-near-heat',
+  'hot-sugar',
+  'sealed-gas-pressure',
+  'vacuum-bag',
+  'home-distilling',
+]);
+
+/**
  * The cautions of a recipe and of every component of it, with what each comes from: its own lines, words of its steps, or the
- * title of a component. What the creator adds comes on top; what is computed cannot be taken away.
+ * title of a component; of components only what is in the glass, not what happened at the stove. What the creator adds comes on top; what is computed cannot be taken away.
  */
 export function findCautions(document: RecipeDocument, context: EngineContext, batches: Batches): CautionFound[] {
   const found = new Map<Caution, Set<string>>();
@@ -21,6 +33,7 @@ export function findCautions(document: RecipeDocument, context: EngineContext, b
       ...each.extraCautions.map((caution) => [caution, null] as const),
     ];
     for (const [caution, from] of caught) {
+      if (each !== document && OF_MAKING.has(caution)) continue;
       const names = found.get(caution) ?? new Set();
       const origin = each === document ? from : each.title;
       if (origin !== null) names.add(origin);

@@ -9,7 +9,7 @@ import { lacksOfStages, limitsOf, runStages, stageMet, stagesOf, type Stage } fr
 import { heatPortion, lossUnknown, stepsThrough } from './treatment.ts';
 import { dimensionOf } from './units.ts';
 
-/** A mixture at its ends: `[least, most]` matter for each figure, before anything is strained off. */
+/** A mixture at its ends: `[least, most]` matter for each figure. */
 export interface Mixture {
   volume: readonly [Matter, Matter];
   strength: readonly [Matter, Matter];
@@ -29,8 +29,8 @@ export function linesThatCount(document: Pick<RecipeDocument, 'sections'>): Reci
 }
 
 /**
- * Pours a recipe together: every line by the larder or its component, heat by time, ice and reducing as stages. `filled` in ml is
- * a measured volume of the whole before straining; it wins over what would be computed.
+ * Pours a recipe together: every line by the larder or its component, heat by time, ice, reducing and straining as
+ * stages. `filled` in ml is the measured volume of the finished whole; it wins over what would be computed.
  */
 export function mix(
   document: RecipeDocument,

@@ -1,12 +1,22 @@
 import type { Lack } from '../contracts/figures.ts';
 import type { Operation, RecipeDocument, RecipeStep } from '../contracts/recipe-document.ts';
 import { dilute, STRONGEST_REGRESSED, type IceMethod } from './dilution.ts';
-import { addMatter, massOf, NOTHING, strengthOf, volumeOf, withVolume, withWater, type Matter } from './matter.ts';
+import {
+  addMatter,
+  massOf,
+  NOTHING,
+  shareOf,
+  strengthOf,
+  volumeOf,
+  withVolume,
+  withWater,
+  type Matter,
+} from './matter.ts';
 import { rest, type RestCode } from './rests.ts';
 import { reachOfSteps } from './step-order.ts';
 import { lossUnknown } from './treatment.ts';
 
-/** A step that changes everything in the vessel at once: ice, or reducing to a known end. */
+/** A step that changes everything in the vessel at once: ice, reducing to a known end, straining with a known loss. */
 export interface Stage {
   step: RecipeStep;
   change: (pot: Matter, end: 'min' | 'max') => Matter;
@@ -25,11 +35,12 @@ const ICE_RESTS: Record<IceMethod, RestCode> = {
 /**
  * The stages of a recipe in the order of its steps. Ice only counts in a drink, and the last chilling counts, so that a dry
  * shake before it is no dilution; in what is built in the glass or hot, and in all other kinds, stirring is just stirring.
+ * Straining takes its share of what has come so far, and leaves alone what is added after it.
  */
 export function stagesOf({ kind, method, steps }: Pick<RecipeDocument, 'kind' | 'method' | 'steps'>): Stage[] {
   const chills = (step: RecipeStep) => iceMethodOf(step) !== null && !(isStirredLightly(step) && BUILT.test(method));
   const iced = kind === 'drink' ? steps.findLast(chills) : undefined;
-  return steps.flatMap((step) => reduceStage(step) ?? (step === iced ? iceStage(step) : []));
+  return steps.flatMap((step) => reduceStage(step) ?? strainStage(step) ?? (step === iced ? iceStage(step) : []));
 }
 
 const BUILT = /\b(?:built|build|hot)\b/i;
@@ -62,6 +73,13 @@ function reduceStage(step: RecipeStep): Stage[] | null {
   const to = step.operation?.kind === 'reduce' ? step.operation.to : null;
   if (!to) return null;
   return [{ step, change: (pot) => reduceTo(pot, to), rests: [rest('reduced-to')], limits: () => [] }];
+}
+
+/** What clings to the solids is the same liquid as what runs through: less of it, neither weaker nor less sweet. */
+function strainStage(step: RecipeStep): Stage[] | null {
+  const loss = step.operation?.kind === 'strain' ? step.operation.lossShare : null;
+  if (!loss) return null;
+  return [{ step, change: (pot) => shareOf(pot, 1 - loss), rests: [], limits: () => [] }];
 }
 
 type ReduceTo = NonNullable<Extract<Operation, { kind: 'reduce' }>['to']>;
