@@ -6,7 +6,6 @@ export const editor = {
   revision: 'revision {n}, saved by {name}, {time}',
   fromShoot: 'from the shoot {title}',
   save: 'Save',
-  saved: 'Saved.',
   revisions: 'Revisions',
   copy: 'Copy this recipe',
   toBindery: 'To the bindery',
