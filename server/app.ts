@@ -41,7 +41,15 @@ export function makeApp(ctx: AppContext): App {
 
   app.use(pinoHttp({ logger: ctx.log, serializers: quietSerializers, autoLogging: { ignore: isQuiet } }));
   app.use(
-    helmet({ contentSecurityPolicy: contentSecurityPolicy(ctx.settings), referrerPolicy: { policy: 'same-origin' } }),
+    helmet({
+      contentSecurityPolicy: contentSecurityPolicy(ctx.settings),
+      referrerPolicy: { policy: 'same-origin' },
+      // These speak to browsers and plug-ins that are long gone.
+      xDnsPrefetchControl: false,
+      xDownloadOptions: false,
+      xPermittedCrossDomainPolicies: false,
+      xXssProtection: false,
+    }),
   );
   app.get('/healthz', healthRoute(ctx));
 

@@ -4,6 +4,7 @@ import { openDatabase } from './db/connection.ts';
 import { openFileStore, type FileStore } from './files/file-store.ts';
 import { openMailer, type Mailer } from './mail/mailer.ts';
 import { openStripe, type StripeClient } from './payments/stripe-client.ts';
+import { keepWrittenPages, type WrittenPages } from './reading/written-pages.ts';
 import type { Settings } from './settings.ts';
 
 /** What every feature is handed: the only place where things that live as long as the process are made. */
@@ -14,6 +15,7 @@ export interface AppContext {
   files: FileStore;
   stripe: StripeClient;
   mail: Mailer;
+  pages: WrittenPages;
   /** The one clock. */
   now: () => Date;
 }
@@ -30,6 +32,7 @@ export function makeContext(settings: Settings, overrides: Partial<AppContext> =
     files: overrides.files ?? openFileStore(settings.dataDir),
     stripe: overrides.stripe ?? openStripe(settings.stripe),
     mail: overrides.mail ?? openMailer(settings.mail),
+    pages: overrides.pages ?? keepWrittenPages(),
     now: overrides.now ?? (() => new Date()),
   };
 }

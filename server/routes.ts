@@ -15,8 +15,9 @@ import { tierRoutes } from './tiers/tiers.routes.ts';
 import { recipeRoutes } from './recipes/recipes.routes.ts';
 import { shootRoutes } from './shoots/shoots.routes.ts';
 
-/** Every route of the house, one line a feature. */
+/** Every route of the house, one line a feature; what is asked most stands first, because it is looked for in this order. */
 export const allRoutes: readonly Route[] = [
+  ...readingRoutes,
   ...sessionRoutes,
   ...peopleRoutes,
   ...imprintRoutes,
@@ -26,7 +27,6 @@ export const allRoutes: readonly Route[] = [
   ...recipeRoutes,
   ...bookRoutes,
   ...editionRoutes,
-  ...readingRoutes,
   ...tierRoutes,
   ...paymentRoutes,
   ...membershipRoutes,

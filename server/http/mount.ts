@@ -8,6 +8,7 @@ import { parse } from './parse.ts';
 import { ACCESS_RULES, type Route } from './registry.ts';
 import { sendFile } from './send-file.ts';
 import { viewerOf } from './viewer.ts';
+import { WrittenAnswer } from './written-answer.ts';
 
 const nothing = z.object({});
 
@@ -72,10 +73,14 @@ function readBody(route: Route, request: Request): unknown {
 /** Cuts the answer to its contract, so that a new column cannot leak. */
 function send(route: Route, value: unknown, response: Response): void {
   if (route.answer === 'file') throw new Error(`Route ${route.id} answers bytes.`);
+  response.status(route.status ?? 200).set('Cache-Control', 'private, no-store');
+  if (value instanceof WrittenAnswer) {
+    response.type('json').send(value.bytes);
+    return;
+  }
   const body = route.answer.parse(value);
   if (route.versioned && hasVersion(body)) response.set('ETag', `"${body.version}"`);
-  response.set('Cache-Control', 'private, no-store');
-  response.status(route.status ?? 200).json(body);
+  response.json(body);
 }
 
 function hasVersion(body: unknown): body is { version: number } {

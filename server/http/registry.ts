@@ -4,6 +4,7 @@ import type { z } from 'zod';
 import type { AppContext } from '../context.ts';
 import type { FileAnswer } from './file-answer.ts';
 import type { Viewer } from './viewer.ts';
+import type { WrittenAnswer } from './written-answer.ts';
 
 /**
  * Who may call a route. `anyone`: nothing on it is kept back. `reader`: past the age check, the gate decides on the
@@ -63,7 +64,9 @@ export interface RouteSpec<
   rawBody?: true;
   /** Largest JSON body in bytes; 1 MiB unless told. */
   bodyLimit?: number;
-  handler: (input: HandlerInput<z.output<P>, z.output<Q>, z.output<B>>) => Promise<z.input<A> | FileAnswer>;
+  handler: (
+    input: HandlerInput<z.output<P>, z.output<Q>, z.output<B>>,
+  ) => Promise<z.input<A> | FileAnswer | WrittenAnswer>;
 }
 
 export type Route = RouteSpec;

@@ -1,6 +1,7 @@
 import type { Knex } from 'knex';
 import type { SubscriptionState } from '../../shared/contracts/membership.ts';
 import type { Role } from '../../shared/contracts/words.ts';
+import { askPrepared, type Prepared } from '../db/prepared.ts';
 
 export interface ViewerRow {
   id: string;
@@ -18,27 +19,21 @@ export interface ViewerRow {
   grace_days: number;
 }
 
-/** Everything about a person that decides what they may do, in one indexed query, prepared by name: every request asks it. */
+/** `$1` is the person. */
+const FIND_VIEWER: Prepared = {
+  name: 'find-viewer',
+  text: `select people.id, people.email, people.name, people.verified_at, people.roles, people.age_confirmed_at,
+      memberships.state, memberships.paid_until, memberships.ends_at, memberships.past_due_since,
+      tiers.rank, tiers.name as tier_name, imprint.grace_days
+    from people
+    cross join imprint
+    left join memberships on memberships.person_id = people.id
+    left join tiers on tiers.id = memberships.tier_id
+    where people.id = $1`,
+};
+
+/** Everything about a person that decides what they may do, in one indexed query. */
 export async function findViewerRow(db: Knex, personId: string): Promise<ViewerRow | undefined> {
-  return db('people')
-    .crossJoin('imprint' as never)
-    .leftJoin('memberships', 'memberships.person_id', 'people.id')
-    .leftJoin('tiers', 'tiers.id', 'memberships.tier_id')
-    .where('people.id', personId)
-    .first<ViewerRow>(
-      'people.id',
-      'people.email',
-      'people.name',
-      'people.verified_at',
-      'people.roles',
-      'people.age_confirmed_at',
-      'memberships.state',
-      'memberships.paid_until',
-      'memberships.ends_at',
-      'memberships.past_due_since',
-      'tiers.rank',
-      'tiers.name as tier_name',
-      'imprint.grace_days',
-    )
-    .options({ name: 'find-viewer' });
+  const [row] = await askPrepared<ViewerRow>(db, FIND_VIEWER, [personId]);
+  return row;
 }

@@ -66,16 +66,7 @@ export async function readGalleyRecipe(
   if (!row) throw notThere();
   const book = { slug: snapshot.book.slug, title: snapshot.book.title };
   const decision = decideRow(gated(row), viewer, ctx.now());
-  if (decision.open) {
-    const read = {
-      ...row,
-      ...gated(row),
-      edition_kind: 'galley',
-      edition_number: 0,
-      book_title: book.title,
-    } as const;
-    return toOpenView(read, book, PLATES);
-  }
+  if (decision.open) return toOpenView(row, { book, edition: { kind: 'galley', number: 0 } }, PLATES);
   if (decision.why === 'withdrawn') throw notThere();
   const tier = decision.why === 'tier' ? await findTierFrom(ctx.db, decision.rank) : undefined;
   return toClosedView(row.teaser, book, PLATES, toClosedBecause(decision, tier));

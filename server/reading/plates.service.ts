@@ -6,7 +6,7 @@ import { toFileAnswer } from '../plates/plates.service.ts';
 import { findRendition, type RenditionName } from '../plates/rendition-address.ts';
 import { decideRow } from './gate-viewer.ts';
 import { notThere } from './reading.errors.ts';
-import { findReadable } from './reading.queries.ts';
+import { findReadable, readBoundTeaser, readBoundText } from './reading.queries.ts';
 import { readIssuedBook } from './reading.service.ts';
 
 interface PlateAsked {
@@ -24,16 +24,17 @@ export async function readPlate(ctx: AppContext, asked: PlateAsked, viewer: Gate
   const row = await findReadable(ctx.db, asked.book, asked.recipe);
   if (!row) throw notThere();
   const decision = decideRow(row, viewer, ctx.now());
-  const lead = row.teaser.leadPlate;
-  if (!decision.open) {
-    const told = decision.why !== 'withdrawn' && asked.rendition.size === 'small' && lead?.id === asked.plate;
-    return answerRendition(ctx, told ? lead : undefined, asked.rendition);
+  if (decision.open) {
+    const { plates } = await readBoundText(ctx.db, row);
+    return answerRendition(
+      ctx,
+      plates.find((plate) => plate.id === asked.plate),
+      asked.rendition,
+    );
   }
-  return answerRendition(
-    ctx,
-    row.plates.find((plate) => plate.id === asked.plate),
-    asked.rendition,
-  );
+  const { leadPlate: lead } = await readBoundTeaser(ctx.db, row);
+  const told = decision.why !== 'withdrawn' && asked.rendition.size === 'small' && lead?.id === asked.plate;
+  return answerRendition(ctx, told ? lead : undefined, asked.rendition);
 }
 
 /** The cover of an issued book; it stands on the front door, before the age check. */

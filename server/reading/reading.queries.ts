@@ -1,4 +1,5 @@
 import type { Knex } from 'knex';
+import { askPrepared, type Prepared } from '../db/prepared.ts';
 import type { BoundPlate } from '../../shared/contracts/editions.ts';
 import type { BoundChapterRow, BoundRecipeRow, BoundTeaser } from '../editions/editions.rows.ts';
 
@@ -15,12 +16,20 @@ export interface TeaserRow extends GatedRow {
   teaser: BoundTeaser;
 }
 
-export interface RecipeRow extends TeaserRow {
-  recipe: BoundRecipeRow['recipe'];
-  plates: BoundPlate[];
+/** One recipe as it stands before readers: all that the gate asks for, and where its text is bound. */
+export interface ReadableRow extends GatedRow {
+  edition_id: string;
+  recipe_id: string;
   edition_kind: 'edition' | 'leaf';
   edition_number: number;
   book_title: string;
+}
+
+/** What of a bound recipe only those may have to whom it is open. */
+export interface BoundText {
+  teaser: BoundTeaser;
+  recipe: BoundRecipeRow['recipe'];
+  plates: BoundPlate[];
 }
 
 /**
@@ -44,39 +53,49 @@ const READABLE = `
       '-infinity')
   order by bound_recipes.recipe_id, editions.issued_at desc, editions.kind desc`;
 
-/**
- * One recipe. The most asked of all queries, so it looks only at this recipe's own rows and is prepared by name: planning it
- * takes longer than running it.
- */
-export async function findReadable(db: Knex, book: string, slug: string): Promise<RecipeRow | undefined> {
-  const { rows } = await db
-    .raw<{ rows: RecipeRow[] }>(
-      `with released as materialized (
-        select editions.id, editions.kind, editions.number, editions.issued_at, editions.opens, books.title as book_title
-        from books
-        join editions on editions.book_id = books.id and editions.state = 'issued'
-        where books.slug = :book
-          and editions.issued_at >= coalesce(
-            (select max(latest.issued_at) from editions latest
-              where latest.book_id = books.id and latest.kind = 'edition' and latest.state = 'issued'),
-            '-infinity')
-      )
-      select bound_recipes.slug, bound_recipes.chapter_id, bound_recipes.access, bound_recipes.teaser,
-        bound_recipes.recipe, bound_recipes.plates, released.kind as edition_kind, released.number as edition_number,
-        released.opens, released.book_title,
-        coalesce(recipes.withdrawn_at >= released.issued_at, false) as withdrawn
-      from released
-      join bound_recipes on bound_recipes.edition_id = released.id
-      join recipes on recipes.id = bound_recipes.recipe_id
-      where bound_recipes.slug = :slug
-        and not exists (
-          select from released newer
-          join bound_recipes again on again.edition_id = newer.id and again.recipe_id = bound_recipes.recipe_id
-          where (newer.issued_at, newer.kind) > (released.issued_at, released.kind))`,
-      { book, slug },
+/** Looks only at this recipe's own rows: planning more takes longer than running it. `$1` is the book's address, `$2` the recipe's. */
+const FIND_READABLE: Prepared = {
+  name: 'find-readable',
+  text: `with released as materialized (
+      select editions.id, editions.kind, editions.number, editions.issued_at, editions.opens, books.title as book_title
+      from books
+      join editions on editions.book_id = books.id and editions.state = 'issued'
+      where books.slug = $1
+        and editions.issued_at >= coalesce(
+          (select max(latest.issued_at) from editions latest
+            where latest.book_id = books.id and latest.kind = 'edition' and latest.state = 'issued'),
+          '-infinity')
     )
-    .options({ name: 'find-readable' });
-  return rows[0];
+    select bound_recipes.edition_id, bound_recipes.recipe_id, bound_recipes.access,
+      released.kind as edition_kind, released.number as edition_number, released.opens, released.book_title,
+      coalesce(recipes.withdrawn_at >= released.issued_at, false) as withdrawn
+    from released
+    join bound_recipes on bound_recipes.edition_id = released.id
+    join recipes on recipes.id = bound_recipes.recipe_id
+    where bound_recipes.slug = $2
+      and not exists (
+        select from released newer
+        join bound_recipes again on again.edition_id = newer.id and again.recipe_id = bound_recipes.recipe_id
+        where (newer.issued_at, newer.kind) > (released.issued_at, released.kind))`,
+};
+
+/** One recipe as readers of the book have it before them. */
+export async function findReadable(db: Knex, book: string, slug: string): Promise<ReadableRow | undefined> {
+  const [row] = await askPrepared<ReadableRow>(db, FIND_READABLE, [book, slug]);
+  return row;
+}
+
+type Bound = Pick<ReadableRow, 'edition_id' | 'recipe_id'>;
+
+/** What everybody past the age check may know of a bound recipe. */
+export async function readBoundTeaser(db: Knex, { edition_id, recipe_id }: Bound): Promise<BoundTeaser> {
+  const row = await db('bound_recipes').where({ edition_id, recipe_id }).first<{ teaser: BoundTeaser }>('teaser');
+  return row.teaser;
+}
+
+/** All of a bound recipe; asked for only where it is open. */
+export async function readBoundText(db: Knex, { edition_id, recipe_id }: Bound): Promise<BoundText> {
+  return db('bound_recipes').where({ edition_id, recipe_id }).first<BoundText>('teaser', 'recipe', 'plates');
 }
 
 /** The teasers of a book in running order; nothing that is kept back is loaded. */

@@ -1,7 +1,8 @@
 import type { z } from 'zod';
-import type { bookContents, readingView, Shelf } from '../../shared/contracts/reading.ts';
+import { readingView, type bookContents, type Shelf } from '../../shared/contracts/reading.ts';
 import type { AppContext } from '../context.ts';
 import type { Decision, GateViewer } from '../gate/gate.ts';
+import { WrittenAnswer } from '../http/written-answer.ts';
 import { toPicture } from '../plates/rendition-address.ts';
 import { decideRow } from './gate-viewer.ts';
 import { notIssued, notThere } from './reading.errors.ts';
@@ -11,6 +12,8 @@ import {
   findReadable,
   findTeasers,
   findTierFrom,
+  readBoundTeaser,
+  readBoundText,
   type IssuedBook,
   type TeaserRow,
 } from './reading.queries.ts';
@@ -35,21 +38,27 @@ export async function readShelf({ db }: AppContext): Promise<Shelf> {
   };
 }
 
-/** A recipe to this reader: whole, or closed behind its teaser. */
+/** A recipe to this reader: whole, or closed behind its teaser. Only an open one's text is fetched. */
 export async function readRecipe(
-  { db, now }: AppContext,
-  { book, slug }: { book: string; slug: string },
+  { db, now, pages }: AppContext,
+  { book: address, slug }: { book: string; slug: string },
   viewer: GateViewer,
-): Promise<z.input<typeof readingView>> {
-  const row = await findReadable(db, book, slug);
+): Promise<z.input<typeof readingView> | WrittenAnswer> {
+  const row = await findReadable(db, address, slug);
   if (!row) throw notThere();
   const decision = decideRow(row, viewer, now());
-  const from = { slug: book, title: row.book_title };
-  const base = plateBase(book, slug);
-  if (decision.open) return toOpenView(row, from, base);
+  const book = { slug: address, title: row.book_title };
+  const base = plateBase(address, slug);
+  if (decision.open) {
+    const edition = { kind: row.edition_kind, number: row.edition_number };
+    return pages.take(
+      JSON.stringify([row.edition_id, row.recipe_id, book]),
+      async () => new WrittenAnswer(readingView, toOpenView(await readBoundText(db, row), { book, edition }, base)),
+    );
+  }
   if (decision.why === 'withdrawn') throw notThere();
   const tier = decision.why === 'tier' ? await findTierFrom(db, decision.rank) : undefined;
-  return toClosedView(row.teaser, from, base, toClosedBecause(decision, tier));
+  return toClosedView(await readBoundTeaser(db, row), book, base, toClosedBecause(decision, tier));
 }
 
 /** The contents of a book as this reader sees them. */

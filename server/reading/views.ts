@@ -5,7 +5,7 @@ import type { ClosedBecause, readingView, recipeTeaser } from '../../shared/cont
 import type { BoundTeaser } from '../editions/editions.rows.ts';
 import type { Decision } from '../gate/gate.ts';
 import { toPicture } from '../plates/rendition-address.ts';
-import type { RecipeRow } from './reading.queries.ts';
+import type { BoundText } from './reading.queries.ts';
 
 /** Where the pictures of a page are asked for. */
 export type PlateBase = string;
@@ -23,18 +23,18 @@ export function toTeaserView(
 
 /** A recipe as an open one is read. */
 export function toOpenView(
-  row: Omit<RecipeRow, 'edition_kind'> & { edition_kind: 'edition' | 'leaf' | 'galley' },
-  book: { slug: string; title: string },
+  text: BoundText,
+  { book, edition }: Pick<Extract<ReadingAnswer, { view: 'open' }>, 'book' | 'edition'>,
   base: PlateBase,
 ): ReadingAnswer {
-  const { document, figures, html, components } = row.recipe;
-  const plates = new Map(row.plates.map((plate) => [plate.id, plate]));
+  const { document, figures, html, components } = text.recipe;
+  const plates = new Map(text.plates.map((plate) => [plate.id, plate]));
   return {
     view: 'open',
-    ...toTeaserView(row.teaser, base, 'all'),
+    ...toTeaserView(text.teaser, base, 'all'),
     totalTime: figures.times.total,
     book,
-    edition: { kind: row.edition_kind, number: row.edition_number },
+    edition,
     method: document.method,
     glass: document.glass,
     ice: document.ice,
