@@ -24,9 +24,12 @@ export function useDraft<T extends object>(saved: () => { fields: T; version: nu
     keepOver();
   }
 
-  /** Keeps what is written and lays it over what is saved now. */
+  /** Keeps what is written and lays it over what is saved now; fields that nobody here has touched are what others saved. */
   function keepOver(): void {
-    begunFrom.value = copy(saved().fields);
+    const { fields } = saved();
+    for (const key of Object.keys(fields) as (keyof T)[])
+      if (isSame(draft.value[key], begunFrom.value[key])) draft.value[key] = copy(fields)[key];
+    begunFrom.value = copy(fields);
     version.value = saved().version;
   }
 
