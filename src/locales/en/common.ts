@@ -13,10 +13,6 @@ export const common = {
   tooLittle: 'At least {min}.',
   tooMuch: 'At most {max}.',
   dismiss: 'Dismiss this message',
-  paging: 'Pages of this list',
-  pagingFrom: '{from}–{to} of {total}',
-  pagingBefore: 'Page before',
-  pagingNext: 'Next page',
 
   theme: {
     toCellar: 'Switch to the cellar theme',
@@ -30,7 +26,6 @@ export const common = {
     join: 'Tiers',
     signIn: 'Sign in',
     signOut: 'Sign out',
-    account: 'Account',
     workroom: 'Workroom',
     readingAs: '{tier}, {name}',
     verify: 'Your e-mail address is not confirmed yet.',
@@ -99,11 +94,6 @@ export const common = {
     waiting: 'waiting',
   },
 
-  table: {
-    sortBy: 'Sort by {column}',
-    empty: 'Nothing here',
-  },
-
   plate: {
     credit: 'Photograph: {credit}',
   },
@@ -111,6 +101,5 @@ export const common = {
   error: {
     faults: 'Please look at:',
     signIn: 'Sign in',
-    title: 'That did not work',
   },
 };

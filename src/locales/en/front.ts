@@ -37,7 +37,6 @@ export const front = {
     contents: 'Contents',
     contentsLede: 'Allergens and cautions are shown to everyone, member or not.',
     more: 'Also on the shelf',
-    moreLede: 'Other books of this house.',
     emptyText: 'The first book of this house is still at the binder’s. Once it is issued, it lies here.',
     emptyStaff: 'To the workroom',
     emptySignIn: 'Sign in',
@@ -52,7 +51,6 @@ export const front = {
     closedText:
       'This house writes about alcoholic drinks, and those can wait. Nothing about you was kept. The book will still be here.',
     again: 'I pressed the wrong answer',
-    done: 'Your age is confirmed. You can read on.',
     answered: 'You have answered already; nothing more is asked.',
   },
 

@@ -10,7 +10,6 @@ export const shoots = {
   length: '{n} cue of {time} | {n} cues of {time}',
   edit: 'Edit the shoot',
   saved: 'The shoot is saved.',
-  back: 'All shoots',
   video: 'The video',
   madeOf: 'Recipes of this shoot',
 
@@ -61,7 +60,6 @@ export const shoots = {
     yield: 'Yield: {amount}',
     servings: 'Servings: {n}',
     keeping: 'Keeping: {text}',
-    days: '{n} days',
     howMuch: 'how much?',
     optional: 'optional',
     leaveOut: 'Leave out',
@@ -72,11 +70,9 @@ export const shoots = {
     cueAt: 'Cue at {time}',
     cue: 'Cue {n}',
     make: 'Make a recipe of it',
-    makeHint: 'The draft becomes a recipe; every line and step keeps its second of video.',
     nothing: 'Nothing could be read',
     nothingText: 'These notes name no amounts and no steps. Bring others, or begin a blank recipe.',
     blank: 'To the recipes',
-    loading: 'Reading the notes',
   },
 
   gaps: {
