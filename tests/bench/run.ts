@@ -22,7 +22,8 @@ export interface Row {
 
 async function main(): Promise<void> {
   const dataDir = await mkdtemp(join(tmpdir(), 'steep-bench-'));
-  const [cluster] = await Promise.all([startCluster(dataDir), buildWhenStale()]);
+  await buildWhenStale();
+  const cluster = await startCluster(dataDir);
   const [port] = await freePorts(1);
   const product = await startProduct({
     port: port!,

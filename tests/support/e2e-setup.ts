@@ -9,7 +9,8 @@ import { startProduct } from '../../server/launch/product.mjs';
 /** Starts the whole product for the browser tests: its own database, data folder and ports, the demonstration seeded. */
 export default async function setUp(): Promise<() => Promise<void>> {
   const dataDir = await mkdtemp(join(tmpdir(), 'steep-e2e-'));
-  const [cluster] = await Promise.all([startCluster(dataDir, { fsync: false }), buildWhenStale()]);
+  await buildWhenStale();
+  const cluster = await startCluster(dataDir, { fsync: false });
   const [port] = await freePorts(1);
   const product = await startProduct({
     port: port!,
