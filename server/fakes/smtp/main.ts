@@ -7,7 +7,10 @@ function complain(error: unknown): void {
 
 try {
   const catcher = await startCatcher(readCatcherSettings(process.env));
+  let ending = false;
   const stop = (): void => {
+    if (ending) return;
+    ending = true;
     catcher.close().then(
       () => process.exit(0),
       (error: unknown) => {
@@ -18,6 +21,8 @@ try {
   };
   process.once('SIGTERM', stop);
   process.once('SIGINT', stop);
+  // Whoever started it was killed.
+  process.once('disconnect', stop);
   process.send?.('ready');
 } catch (error) {
   complain(error);

@@ -4,7 +4,10 @@ import { readFakeSettings } from './settings.ts';
 
 try {
   const fake = await startFake(readFakeSettings(process.env));
+  let ending = false;
   const stop = (): void => {
+    if (ending) return;
+    ending = true;
     fake.close().then(
       () => process.exit(0),
       (error: unknown) => {
@@ -15,6 +18,8 @@ try {
   };
   process.once('SIGTERM', stop);
   process.once('SIGINT', stop);
+  // Whoever started it was killed.
+  process.once('disconnect', stop);
   process.send?.('ready');
 } catch (error) {
   complain('start', error instanceof Error ? error.message : error);
