@@ -1,5 +1,6 @@
 import { z } from 'zod';
 
+const given = z.string({ error: 'is missing' });
 const port = z.coerce.number().int().min(0).max(65_535);
 
 const environment = z.object({
@@ -8,9 +9,9 @@ const environment = z.object({
   PORT: port.default(8080),
   DATABASE_URL: z.url({ protocol: /^postgres(ql)?$/, error: 'must be a postgresql:// address' }),
   DATA_DIR: z.string().min(1).default('.data'),
-  SESSION_SECRET: z.string().min(32, 'must have at least 32 characters'),
-  STRIPE_SECRET_KEY: z.string().regex(/^(sk|rk)_/, 'must be a secret key of the payment service (sk_…)'),
-  STRIPE_WEBHOOK_SECRET: z.string().regex(/^whsec_/, 'must be a signing secret (whsec_…)'),
+  SESSION_SECRET: given.min(32, 'must have at least 32 characters'),
+  STRIPE_SECRET_KEY: given.regex(/^(sk|rk)_/, 'must be a secret key of the payment service (sk_…)'),
+  STRIPE_WEBHOOK_SECRET: given.regex(/^whsec_/, 'must be a signing secret (whsec_…)'),
   STRIPE_API_BASE: z.url({ protocol: /^https?$/ }).optional(),
   SMTP_URL: z.url({ protocol: /^smtps?$/, error: 'must be an smtp:// or smtps:// address' }),
   LETTERS_URL: z.url({ protocol: /^http$/ }).optional(),
