@@ -30,14 +30,22 @@ untilEnded(async ({ closing, end }) => {
   });
   closing.push(product.stop);
 
-  const vite = spawn('npx', ['vite', '--port', String(port), '--strictPort'], {
-    cwd: ROOT,
-    detached: true,
-    stdio: ['ignore', 'inherit', 'inherit'],
-    env: { ...process.env, API_URL: `http://127.0.0.1:${apiPort}` },
-  });
+  const vite = spawn(
+    process.execPath,
+    [inRoot('node_modules', 'vite', 'bin', 'vite.js'), '--port', String(port), '--strictPort'],
+    {
+      cwd: ROOT,
+      detached: true,
+      stdio: ['ignore', 'inherit', 'inherit'],
+      env: { ...process.env, API_URL: `http://127.0.0.1:${apiPort}` },
+    },
+  );
   vite.once('exit', () => end('Vite has ended.'));
   closing.push(async () => {
-    vite.kill('SIGTERM');
+    if (vite.exitCode !== null || vite.signalCode !== null) return;
+    await new Promise((resolve) => {
+      vite.once('exit', resolve);
+      vite.kill('SIGTERM');
+    });
   });
 });
