@@ -5,6 +5,7 @@ import { freePorts } from '../../server/launch/ports.mjs';
 import { inRoot } from '../../server/launch/paths.mjs';
 import type { House, Row } from './run.ts';
 
+const ROUNDS = 3;
 const RECIPE = '/api/reading/slack-water/whitecap-sour';
 
 /**
@@ -17,10 +18,21 @@ export async function* benchReading(house: House): AsyncGenerator<Row> {
   const body = await answer.text();
   if (!body.startsWith('{"view":"open"')) throw new Error('The member was not let in: nothing to measure.');
 
-  const read = await throughput(house.url + RECIPE, cookie);
-  const three = await bare(house, { body, queries: 3 });
-  const one = await bare(house, { body, queries: 1 });
-  const ratio = read / three;
+  const [three, one] = await Promise.all([3, 1].map((queries) => startBare(house, { body, queries })));
+  const sums = { read: 0, three: 0, one: 0 };
+  try {
+    // In turns, so that whatever else the machine does meets all of them alike.
+    for (let round = 0; round < ROUNDS; round += 1) {
+      sums.read += await throughput(house.url + RECIPE, cookie);
+      sums.three += await throughput(three!.url, '');
+      sums.one += await throughput(one!.url, '');
+    }
+  } finally {
+    three!.stop();
+    one!.stop();
+  }
+  const { read, three: bare, one: single } = sums;
+  const ratio = read / bare;
   yield {
     name: 'gated recipe read over HTTP, share of the throughput of a bare route with as many indexed queries',
     value: round(ratio),
@@ -28,10 +40,10 @@ export async function* benchReading(house: House): AsyncGenerator<Row> {
     goal: '>= 0.6',
     met: ratio >= 0.6,
     detail: {
-      readsPerSecond: Math.round(read),
-      bareWithThreeQueriesPerSecond: Math.round(three),
-      bareWithOneQueryPerSecond: Math.round(one),
-      shareOfOneQuery: round(read / one),
+      readsPerSecond: Math.round(read / ROUNDS),
+      bareWithThreeQueriesPerSecond: Math.round(bare / ROUNDS),
+      bareWithOneQueryPerSecond: Math.round(single / ROUNDS),
+      shareOfOneQuery: round(read / single),
       bytes: body.length,
     },
   };
@@ -52,7 +64,10 @@ async function signInAsMember(url: string): Promise<string> {
   throw new Error('The demonstration’s member has not joined within a minute.');
 }
 
-async function bare(house: House, { body, queries }: { body: string; queries: number }): Promise<number> {
+async function startBare(
+  house: House,
+  { body, queries }: { body: string; queries: number },
+): Promise<{ url: string; stop: () => void }> {
   const [port] = await freePorts(1);
   const env = {
     ...process.env,
@@ -62,21 +77,17 @@ async function bare(house: House, { body, queries }: { body: string; queries: nu
     QUERIES: String(queries),
   };
   const child = fork(inRoot('tests/bench/bare-server.mjs'), [], { env });
-  try {
-    await new Promise((resolve) => child.once('message', resolve));
-    child.send({ body });
-    await new Promise((resolve) => child.once('message', resolve));
-    return await throughput(`http://127.0.0.1:${port}/`, '');
-  } finally {
-    child.kill();
-  }
+  await new Promise((resolve) => child.once('message', resolve));
+  child.send({ body });
+  await new Promise((resolve) => child.once('message', resolve));
+  return { url: `http://127.0.0.1:${port}/`, stop: () => child.kill() };
 }
 
 /** Requests a second over ten connections, after a warm-up. */
 async function throughput(url: string, cookie: string): Promise<number> {
   const options = { url, connections: 10, headers: cookie ? { cookie } : {} };
-  await autocannon({ ...options, duration: 3 });
-  const { requests, non2xx } = await autocannon({ ...options, duration: 8 });
+  await autocannon({ ...options, duration: 2 });
+  const { requests, non2xx } = await autocannon({ ...options, duration: 5 });
   if (non2xx > 0) throw new Error(`${non2xx} answers were no good ones.`);
   return requests.average;
 }

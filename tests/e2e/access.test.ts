@@ -69,6 +69,8 @@ async function open(page: Page, path: string): Promise<void> {
   await page.goto(path);
   await expect(page.getByRole('heading', { level: 1 })).toHaveCount(1);
   await expect(page.locator('.app-skeleton')).toHaveCount(0);
+  // What arrives later would stand between the controls that are counted.
+  await page.waitForLoadState('networkidle');
 }
 
 /** What axe finds serious or critical, in either theme. */
